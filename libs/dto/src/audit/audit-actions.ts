@@ -1,0 +1,26 @@
+/** The closed list of things that the audit trail records, past tense, `<subject>.<fact>`. */
+export const AUDIT_ACTIONS = [
+  'person.signed_in',
+  'person.sign_in_refused',
+  'person.signed_out',
+  'import.uploaded',
+  'import.refused',
+  'import.previewed',
+  'import.committed',
+  'import.discarded',
+  'quarter.moved',
+  'run.started',
+  'run.completed',
+  'run.failed',
+  'run.cancelled',
+  'flag.decided',
+  'sign_off.signed',
+  'sign_off.refused',
+  'publication.requested',
+  'publication.completed',
+  'statement.viewed',
+  'participant.viewed',
+  'notice.sent',
+  'notice.failed',
+] as const;
+export type AuditAction = (typeof AUDIT_ACTIONS)[number];
