@@ -118,6 +118,10 @@ export const importView = z.object({
 });
 export type ImportView = z.infer<typeof importView>;
 
+/** Event `progress` of an import's stream. */
+export const importProgress = importView.pick({ state: true, progress: true });
+export type ImportProgress = z.infer<typeof importProgress>;
+
 /** One faulty place in a file: where, what stands there, why it cannot be taken, how to mend it. */
 export const importRowError = z.object({
   line: z.int(),
