@@ -1,0 +1,61 @@
+import type { ReactNode } from 'react';
+import { useTranslation } from 'react-i18next';
+import { Link, NavLink } from 'react-router-dom';
+import { useSession } from '../../lib/session';
+import { Mark } from '../mark';
+import { HatSwitch } from './hat-switch';
+import { LanguageSwitch } from './language-switch';
+import styles from './page-shell.module.css';
+import { SignOutButton } from './sign-out-button';
+import { ThemeSwitch } from './theme-switch';
+
+interface PageShellProps {
+  navigation: readonly { text: string; path: string }[];
+  homePath: string;
+  children: ReactNode;
+}
+
+/** Header, navigation and main part of every screen behind the sign-in. Plain elements: it is part of everybody's first load. */
+export function PageShell({ navigation, homePath, children }: PageShellProps) {
+  const { t } = useTranslation('shell');
+  const { person } = useSession();
+  return (
+    <>
+      <a href="#main" className={styles.skip}>
+        {t('skip')}
+      </a>
+      <header className={`${styles.band} screen-only`}>
+        <div className={styles.row}>
+          <Link to={homePath} className={styles.name}>
+            <Mark />
+            <span>Quarterpoise</span>
+          </Link>
+          <nav aria-label={t('navigation.label')} className={styles.navigation}>
+            {navigation.map((item) => (
+              <NavLink key={item.path} to={item.path} end={item.path === '/my'} className={styles.link ?? ''}>
+                {t(`navigation.${item.text}`)}
+              </NavLink>
+            ))}
+          </nav>
+          <div className={styles.person}>
+            <HatSwitch />
+            <details className={styles.menu}>
+              <summary>
+                <span className={styles.personName}>{person.displayName}</span>
+              </summary>
+              <div className={styles.panel}>
+                <p className={styles.address}>{person.email}</p>
+                <LanguageSwitch />
+                <ThemeSwitch />
+                <SignOutButton />
+              </div>
+            </details>
+          </div>
+        </div>
+      </header>
+      <main id="main" tabIndex={-1} className={styles.main}>
+        {children}
+      </main>
+    </>
+  );
+}

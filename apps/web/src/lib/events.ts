@@ -1,0 +1,83 @@
+import { useEffect, useRef, useState } from 'react';
+import { addressOf } from './api-client';
+import type { RouteId } from './routes';
+
+type EventRouteId = Extract<RouteId, `${string}.events`>;
+
+const FIRST_WAIT_MS = 1_000;
+const LONGEST_WAIT_MS = 15_000;
+
+export interface EventHandlers<Progress> {
+  onProgress(progress: Progress): void;
+  onFinished(): void;
+  /** The line is down (true) or up again (false); the wrapper keeps trying by itself. */
+  onInterrupted?(isInterrupted: boolean): void;
+}
+
+/**
+ * Listens to a progress stream until it says `finished`. EventSource comes back by itself after a dropped line, but gives up on an
+ * HTTP error (a restart of the service); that is tried again here with growing pauses. Returns the function that stops listening.
+ */
+export function listen<Progress>(id: EventRouteId, resourceId: string, handlers: EventHandlers<Progress>): () => void {
+  let source: EventSource | null = null;
+  let timer: ReturnType<typeof setTimeout> | undefined;
+  let waitMs = FIRST_WAIT_MS;
+  let isStopped = false;
+
+  const stop = () => {
+    isStopped = true;
+    clearTimeout(timer);
+    source?.close();
+  };
+  const open = () => {
+    source = new EventSource(addressOf(id, { id: resourceId }), { withCredentials: true });
+    source.onopen = () => {
+      waitMs = FIRST_WAIT_MS;
+      handlers.onInterrupted?.(false);
+    };
+    source.addEventListener('progress', (event) => {
+      handlers.onProgress(JSON.parse((event as MessageEvent<string>).data) as Progress);
+    });
+    source.addEventListener('finished', (event) => {
+      stop();
+      const { data } = event as MessageEvent<string | undefined>;
+      if (data) handlers.onProgress(JSON.parse(data) as Progress);
+      handlers.onFinished();
+    });
+    source.onerror = () => {
+      if (isStopped) return;
+      handlers.onInterrupted?.(true);
+      if (source?.readyState !== EventSource.CLOSED) return;
+      timer = setTimeout(open, waitMs);
+      waitMs = Math.min(waitMs * 2, LONGEST_WAIT_MS);
+    };
+  };
+  open();
+  return stop;
+}
+
+/** The newest progress of a resource while `isGoing`; `onFinished` is where the caller reads the outcome anew. */
+export function useProgressEvents<Progress>(
+  id: EventRouteId,
+  resourceId: string,
+  isGoing: boolean,
+  onFinished: () => void,
+): { progress: Progress | null; isInterrupted: boolean } {
+  const [progress, setProgress] = useState<Progress | null>(null);
+  const [isInterrupted, setInterrupted] = useState(false);
+  const finished = useRef(onFinished);
+  useEffect(() => {
+    finished.current = onFinished;
+  });
+
+  useEffect(() => {
+    if (!isGoing) return;
+    return listen<Progress>(id, resourceId, {
+      onProgress: setProgress,
+      onFinished: () => finished.current(),
+      onInterrupted: setInterrupted,
+    });
+  }, [id, resourceId, isGoing]);
+
+  return { progress, isInterrupted };
+}
