@@ -4,6 +4,7 @@ export { FLOW_TIMINGS, InvalidWindow, readWindow } from './window/window.js';
 export type { Flow, FlowTiming, WindowInput } from './window/window.js';
 export { OUTCOME_REASONS, toAnswer } from './solve/outcome.js';
 export type { Answer, Outcome, OutcomeReason, OutcomeStatus } from './solve/outcome.js';
+export { solveWindow } from './solve/solve-window.js';
 export { ACTIVITY_KINDS } from './treatments/activity-kinds.js';
 export type { ActivityKind } from './treatments/activity-kinds.js';
 export { DEFAULT_RETURN_POLICY, WINDOW_CODES } from './treatments/return-policy.js';

@@ -8,8 +8,6 @@ export const OUTCOME_REASONS = [
   'no-money',
   /** There is money, but none of it was in the account for any time. */
   'no-time',
-  /** Everything cancels: every rate satisfies the equation. */
-  'every-rate-fits',
   /** All that remains in the equation has one sign, so that nothing can balance it. */
   'one-sided',
   /** Both signs occur, and yet no growth factor balances the equation. */
@@ -60,7 +58,7 @@ export interface NoSolution extends Common {
 
 export interface NoCapital extends Common {
   readonly status: 'no-capital';
-  readonly reason: 'no-money' | 'no-time' | 'every-rate-fits';
+  readonly reason: 'no-money' | 'no-time';
 }
 
 /** What a window's question came to; every case is an answer, none is an exception. */

@@ -102,7 +102,10 @@ export function readWindow(value: unknown): WindowInput {
   }
   const years = given['years'] ?? null;
   if (years !== null && !(Number.isInteger(years) && (years as number) >= 0 && (years as number) <= LARGEST_YEARS)) {
-    throw new InvalidWindow('years', `${shown(years)}; give a whole number from 0 to ${LARGEST_YEARS}, or leave it out`);
+    throw new InvalidWindow(
+      'years',
+      `${shown(years)}; give a whole number from 0 to ${LARGEST_YEARS}, or leave it out`,
+    );
   }
   return {
     openedOn: given['openedOn'] as string,
