@@ -21,3 +21,9 @@ export type {
   ResultWindow,
   UnavailableReason,
 } from './windows/account.js';
+export { computeAccount } from './windows/compute-account.js';
+export { windowOf } from './windows/window-of.js';
+export { treatmentsOf } from './treatments/treatments.js';
+export type { MovementLine, Treatment } from './treatments/treatments.js';
+export { derive, workingOf } from './working/derive.js';
+export type { Derivation, Working, WorkingStep } from './working/derive.js';

@@ -51,9 +51,9 @@ export function percentOf(root: RefinableRoot, growth: Growth): string {
   return writePercent(exactHundredths(root, growth).toFixed(0, ROUND_HALF_AWAY));
 }
 
-/** The same percentage before its rounding, to `digits` decimals, for the working. */
+/** The same percentage before its rounding, cut off after `digits` decimals, for the working. */
 export function exactPercentOf(root: RefinableRoot, growth: Growth, digits: number): string {
-  return exactHundredths(root, growth).div(100).toDecimalPlaces(digits).toFixed();
+  return exactHundredths(root, growth).div(100).toDecimalPlaces(digits, Decimal.ROUND_DOWN).toFixed();
 }
 
 function exactHundredths(root: RefinableRoot, growth: Growth): Decimal {

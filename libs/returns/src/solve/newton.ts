@@ -1,7 +1,7 @@
 import { type Evaluation, evaluate, rootBounds, type Terms } from './evaluate.js';
 
-/** One evaluated iterate, for those who want to follow the way. */
-export type Observer = (v: number, evaluation: Evaluation) => void;
+/** Is told every iterate, the last one too. */
+export type Observer = (v: number) => void;
 
 export interface NewtonResult {
   readonly hasConverged: boolean;
@@ -36,7 +36,7 @@ export function newton(terms: Terms, spanHalfDays: number, start: number, observ
   let v = start > low && start < high ? start : (low + high) / 2;
   for (let iterations = 0; iterations < MOST_ITERATIONS; iterations += 1) {
     const at = evaluate(terms, v);
-    observe?.(v, at);
+    observe?.(v);
     if (Math.abs(at.value) <= noise * at.size) return { hasConverged: true, v, iterations };
     if (hasBracket) {
       if (at.value * topSign > 0) high = v;
@@ -52,6 +52,7 @@ export function newton(terms: Terms, spanHalfDays: number, start: number, observ
     const moved = Math.abs(next - v);
     v = next;
     if (moved <= 1e-13 * Math.max(Math.abs(v), 1 / spanHalfDays)) {
+      observe?.(v);
       return { hasConverged: true, v, iterations: iterations + 1 };
     }
   }

@@ -88,7 +88,8 @@ export function solveEquation(equation: Equation, rule: AnnualRule): Outcome {
   };
 }
 
-function annualGrowth(equation: Equation, rule: AnnualRule): Growth | null {
+/** Over what the annual rate is taken, or null where there is none. */
+export function annualGrowth(equation: Equation, rule: AnnualRule): Growth | null {
   // Never annualise what is not longer than a year.
   if (rule.by === 'none' || equation.halfDays <= HALF_DAYS_OF_YEAR) return null;
   if (rule.by === 'years' && equation.isWholeWindow) return { halfDays: equation.halfDays, degree: rule.years };

@@ -54,10 +54,8 @@ export function equationOf(slice: WindowSlice): Equation {
   const { openedDay, closedDay, openingCents, closingCents, days, cents, from, to } = slice;
   const lag = LAG[slice.timing];
   const count = to - from;
-  let start = 2 * openedDay;
-  if (openingCents === 0 && count > 0) start = 2 * days[from]! - lag;
-  let end = 2 * closedDay;
-  if (closingCents === 0 && count > 0 && cents[to - 1]! < 0) end = 2 * days[to - 1]! - lag;
+  const start = openingCents === 0 && count > 0 ? 2 * days[from]! - lag : 2 * openedDay;
+  const end = effectiveEnd(slice);
 
   const exponents = new Float64Array(count + 2);
   const amounts = new Float64Array(count + 2);
@@ -101,6 +99,16 @@ export function equationOf(slice: WindowSlice): Equation {
     isWholeWindow: end - start === 2 * (closedDay - openedDay),
   };
 }
+
+/** The effective end in half days: the close, or the last flow's moment where it took out all that was left. */
+function effectiveEnd({ closedDay, closingCents, days, cents, from, to, timing }: WindowSlice): number {
+  const isEmptied = closingCents === 0 && to > from && cents[to - 1]! < 0;
+  return isEmptied ? 2 * days[to - 1]! - LAG[timing] : 2 * closedDay;
+}
+
+/** Half days that a flow of the window is at work before the effective end. */
+export const flowExponent = (slice: WindowSlice, index: number): number =>
+  effectiveEnd(slice) - 2 * slice.days[index]! + LAG[slice.timing];
 
 const tooLarge = (): InvalidWindow => new InvalidWindow('flows', 'and balances together exceed 9007199254740991 cents');
 
