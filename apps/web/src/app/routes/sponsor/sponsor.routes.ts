@@ -1,3 +1,31 @@
 import type { RouteObject } from 'react-router-dom';
+import { lazyScreen } from '../../lazy-screen';
 
-export const sponsorRoutes: RouteObject[] = [];
+/** Screens of administrator, approver and auditor. The service decides what each may do; the screens show what it says. */
+export const sponsorRoutes: RouteObject[] = [
+  { path: 'plans', ...lazyScreen(() => import('./plans-page'), ['plans', 'quarter']) },
+  { path: 'plans/:planId', ...lazyScreen(() => import('./plan-page'), ['plans', 'quarter']) },
+  {
+    path: 'quarters/:quarterId',
+    ...lazyScreen(() => import('./quarter-page'), ['quarter', 'imports', 'run', 'publication']),
+  },
+  { path: 'quarters/:quarterId/files', ...lazyScreen(() => import('./files-page'), ['quarter', 'imports']) },
+  { path: 'quarters/:quarterId/files/:importId', ...lazyScreen(() => import('./file-page'), ['quarter', 'imports']) },
+  { path: 'quarters/:quarterId/runs/:runId', ...lazyScreen(() => import('./run-page'), ['quarter', 'run']) },
+  {
+    path: 'quarters/:quarterId/runs/:runId/review',
+    ...lazyScreen(() => import('./review-page'), ['quarter', 'review', 'results']),
+  },
+  {
+    path: 'quarters/:quarterId/runs/:runId/results',
+    ...lazyScreen(() => import('./results-page'), ['quarter', 'review', 'results']),
+  },
+  {
+    path: 'quarters/:quarterId/sign-off',
+    ...lazyScreen(() => import('./sign-off-page'), ['quarter', 'run', 'sign-off', 'results']),
+  },
+  {
+    path: 'quarters/:quarterId/publication',
+    ...lazyScreen(() => import('./publication-page'), ['quarter', 'publication']),
+  },
+];

@@ -1,0 +1,3 @@
+import { usePagedRoute } from '../../../lib/swr';
+
+export const useImportErrors = (importId: string) => usePagedRoute('imports.errors', { id: importId }, { limit: 100 });

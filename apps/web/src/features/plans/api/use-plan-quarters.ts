@@ -1,0 +1,3 @@
+import { useRoute } from '../../../lib/swr';
+
+export const usePlanQuarters = (planId: string) => useRoute('quarters.list', { params: { planId } });

@@ -1,0 +1,3 @@
+import { useRoute } from '../../../lib/swr';
+
+export const usePlan = (planId: string) => useRoute('plans.view', { params: { planId } });
