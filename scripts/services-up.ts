@@ -25,7 +25,7 @@ async function stay(): Promise<void> {
   const crashed = new Promise<never>((_, reject) => (crash = reject));
   const services = await startServices({
     dataFolder: DEVELOPMENT_FOLDER,
-    with: ['postgres', 'redis', 'mail'],
+    with: ['postgres', 'redis', 'mail', 'identity-provider'],
     durable: false,
     // what the harness of the integration tests sets too: roles belong to the whole server, whoever sets them last wins
     rolePasswords: { ownerPassword: 'test-owner', appPassword: 'test-app' },

@@ -46,12 +46,24 @@ function idOf(value: unknown): Identifier {
   return typeof id === 'string' || typeof id === 'number' ? id : null;
 }
 
+const ID_WITHIN = /"id"\s*:\s*("(?:[^"\\]|\\.)*"|-?\d+(?:\.\d+)?)/;
+
+/** The id of a line that is broken elsewhere, so that its sender can find it. */
+function idWithin(text: string): Identifier {
+  const found = ID_WITHIN.exec(text)?.[1];
+  try {
+    return found === undefined ? null : idOf({ id: JSON.parse(found) as unknown });
+  } catch {
+    return null;
+  }
+}
+
 function answerLine(text: string): Line {
   let value: unknown;
   try {
     value = JSON.parse(text);
   } catch {
-    return invalid(null, 'line is not JSON; give one JSON object a line');
+    return invalid(idWithin(text), 'line is not JSON; give one JSON object a line');
   }
   const id = idOf(value);
   try {
