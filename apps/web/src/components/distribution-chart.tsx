@@ -47,7 +47,7 @@ function range(distribution: Distribution): [number, number] {
 
 /** How many accounts earned how much, this quarter in solid bars before last quarter's outline. The same figures stand in a table below. */
 export function DistributionChart({ now, nowName, before, beforeName }: DistributionChartProps) {
-  const { t, i18n } = useTranslation('shell');
+  const { t, i18n } = useTranslation('figures');
   const [from, to] = range([...now, ...(before ?? [])]);
   const nowBins = binned(now, from, to);
   const beforeBins = before ? binned(before, from, to) : null;

@@ -5,7 +5,7 @@ import styles from './run-totals.module.css';
 
 /** The totals that must tie to something independent of the run; what could not be checked says so and never counts as passed. */
 export function TiesTable({ ties }: { ties: RunTotals['ties'] }) {
-  const { t } = useTranslation('shell');
+  const { t } = useTranslation('figures');
   return (
     <div className={styles.scroll} tabIndex={0} role="region" aria-label={t('ties.title')}>
       <table className={styles.table}>

@@ -7,7 +7,7 @@ import styles from './run-totals.module.css';
 
 /** How the plan's opening became its closing, and how many accounts came out how. */
 export function TotalsList({ totals }: { totals: RunTotals }) {
-  const { t, i18n } = useTranslation('shell');
+  const { t, i18n } = useTranslation('figures');
   const count = (value: number) => <span className="figures">{formatCount(value, i18n.language)}</span>;
   return (
     <dl className={styles.totals}>

@@ -11,18 +11,18 @@ export const sponsorRoutes: RouteObject[] = [
   },
   { path: 'quarters/:quarterId/files', ...lazyScreen(() => import('./files-page'), ['quarter', 'imports']) },
   { path: 'quarters/:quarterId/files/:importId', ...lazyScreen(() => import('./file-page'), ['quarter', 'imports']) },
-  { path: 'quarters/:quarterId/runs/:runId', ...lazyScreen(() => import('./run-page'), ['quarter', 'run']) },
+  { path: 'quarters/:quarterId/runs/:runId', ...lazyScreen(() => import('./run-page'), ['quarter', 'run', 'figures']) },
   {
     path: 'quarters/:quarterId/runs/:runId/review',
-    ...lazyScreen(() => import('./review-page'), ['quarter', 'review', 'results']),
+    ...lazyScreen(() => import('./review-page'), ['quarter', 'review', 'results', 'figures']),
   },
   {
     path: 'quarters/:quarterId/runs/:runId/results',
-    ...lazyScreen(() => import('./results-page'), ['quarter', 'review', 'results']),
+    ...lazyScreen(() => import('./results-page'), ['quarter', 'review', 'results', 'figures']),
   },
   {
     path: 'quarters/:quarterId/sign-off',
-    ...lazyScreen(() => import('./sign-off-page'), ['quarter', 'run', 'sign-off', 'results']),
+    ...lazyScreen(() => import('./sign-off-page'), ['quarter', 'sign-off', 'results', 'review', 'figures']),
   },
   {
     path: 'quarters/:quarterId/publication',

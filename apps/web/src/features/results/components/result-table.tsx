@@ -6,7 +6,7 @@ import styles from './results.module.css';
 
 /** Results of accounts as a table; also the sample on the sign-off sheet. */
 export function ResultTable({ rows, label }: { rows: readonly ResultRow[]; label: string }) {
-  const { t } = useTranslation(['results', 'review', 'shell']);
+  const { t } = useTranslation(['results', 'review', 'figures']);
   return (
     <div className={styles.scroll} tabIndex={0} role="region" aria-label={label}>
       <table className={styles.table}>
@@ -50,7 +50,7 @@ export function ResultTable({ rows, label }: { rows: readonly ResultRow[]; label
               </td>
               <td className={styles.right}>
                 {row.periodReturnPct === null ? (
-                  t(`shell:status.${row.status}`)
+                  t(`figures:status.${row.status}`)
                 ) : (
                   <Rate percent={row.periodReturnPct} signed />
                 )}

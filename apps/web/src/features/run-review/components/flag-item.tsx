@@ -19,7 +19,7 @@ interface FlagItemProps {
 
 /** One flag: whose, what it says, first estimate beside solved rate, and the decision. */
 export function FlagItem({ flag, isCurrent, isMarked, canDecide, onEnter, onMark, onAsk }: FlagItemProps) {
-  const { t, i18n } = useTranslation(['review', 'shell']);
+  const { t, i18n } = useTranslation(['review', 'figures']);
   const isDecided = flag.decision !== null && flag.decision.decision !== 'reopened';
   const who =
     flag.accountId === null ? t('review:wholePlan') : `${flag.participantNumber ?? ''} ${flag.name ?? ''}`.trim();
@@ -58,7 +58,7 @@ export function FlagItem({ flag, isCurrent, isMarked, canDecide, onEnter, onMark
           <dt>{t('review:solved')}</dt>
           <dd>
             {flag.periodReturnPct === null && flag.status !== null ? (
-              t(`shell:status.${flag.status}`)
+              t(`figures:status.${flag.status}`)
             ) : (
               <Rate percent={flag.periodReturnPct} signed />
             )}
