@@ -72,14 +72,20 @@ async function makeCluster(folder: string, cluster: string, account: ServiceAcco
     await promisify(execFile)(
       join(POSTGRES_PROGRAMS, 'initdb'),
       [
-        ...['--pgdata', draft, '--username', SUPERUSER, '--pwfile', passwordFile],
-        ...['--auth', 'scram-sha-256', '--encoding', 'UTF8', '--locale', 'C.UTF-8', '--no-instructions'],
+        `--pgdata=${draft}`,
+        `--username=${SUPERUSER}`,
+        `--pwfile=${passwordFile}`,
+        '--auth=scram-sha-256',
+        '--encoding=UTF8',
+        '--locale=C.UTF-8',
       ],
       { ...account, cwd: '/', env: environment() },
     );
     renameSync(draft, cluster);
   } catch (error) {
-    throw new Error(`PostgreSQL could not set up its data folder ${folder}: ${lastLine((error as Error).message)}`);
+    throw new Error(`PostgreSQL could not set up its data folder ${folder}: ${lastLine((error as Error).message)}`, {
+      cause: error,
+    });
   } finally {
     rmSync(passwordFile, { force: true });
   }
@@ -153,9 +159,11 @@ async function ready(adminUrl: string): Promise<void> {
       if ((error as { code?: string }).code === '28P01') {
         throw new Error(
           'PostgreSQL refuses the kept password: secrets.json and the data folder do not belong together. Delete the data folder to begin anew.',
+          { cause: error },
         );
       }
-      if (Date.now() > until) throw new Error(`PostgreSQL does not answer: ${(error as Error).message}`);
+      if (Date.now() > until)
+        throw new Error(`PostgreSQL does not answer: ${(error as Error).message}`, { cause: error });
       await pause(100);
     } finally {
       await client.end().catch(() => undefined);

@@ -114,7 +114,7 @@ async function ready(redisUrl: string): Promise<void> {
       await client.ping();
       return;
     } catch (error) {
-      if (Date.now() > until) throw new Error(`Redis does not answer: ${(error as Error).message}`);
+      if (Date.now() > until) throw new Error(`Redis does not answer: ${(error as Error).message}`, { cause: error });
       await pause(50);
     } finally {
       client.disconnect();

@@ -65,7 +65,7 @@ export async function startServices(options: ServicesOptions): Promise<Services>
     const results = await Promise.allSettled(
       running
         .splice(0)
-        .reverse()
+        .toReversed()
         .map((service) => service.stop()),
     );
     rmSync(join(dataFolder, 'services.json'), { force: true });
