@@ -1,6 +1,16 @@
 /** Days before each month in a year without leap day. */
 const DAYS_BEFORE_MONTH = [0, 31, 59, 90, 120, 151, 181, 212, 243, 273, 304, 334] as const;
-const CIVIL_DATE = /^(\d{4})-(\d{2})-(\d{2})$/;
+
+/** Digits `from` to before `to` as a number; NaN where one is no digit. */
+function digits(text: string, from: number, to: number): number {
+  let value = 0;
+  for (let index = from; index < to; index += 1) {
+    const digit = text.charCodeAt(index) - 48;
+    if (!(digit >= 0 && digit <= 9)) return NaN;
+    value = value * 10 + digit;
+  }
+  return value;
+}
 
 const isLeapYear = (year: number): boolean => (year % 4 === 0 && year % 100 !== 0) || year % 400 === 0;
 
@@ -30,11 +40,11 @@ const write = (year: number, month: number, day: number): string =>
  * Example: `readDay('1970-01-02')` is 1, `readDay('2026-02-30')` is null.
  */
 export function readDay(text: string): number | null {
-  const match = CIVIL_DATE.exec(text);
-  if (match === null) return null;
-  const year = Number(match[1]);
-  const month = Number(match[2]);
-  const day = Number(match[3]);
+  if (text.length !== 10 || text[4] !== '-' || text[7] !== '-') return null;
+  const year = digits(text, 0, 4);
+  const month = digits(text, 5, 7);
+  const day = digits(text, 8, 10);
+  if (Number.isNaN(year + month + day)) return null;
   if (year < 1 || month < 1 || month > 12 || day < 1 || day > daysInMonth(year, month)) return null;
   return dayOf(year, month, day);
 }
@@ -68,6 +78,10 @@ export function civilParts(day: number): { year: number; month: number; day: num
   return { year, month, day: rest + 1 };
 }
 
+/** Accounts of a plan share their days: a run writes each once. */
+const written = new Map<number, string>();
+const MOST_WRITTEN = 20_000;
+
 /**
  * The civil date of a day number; the inverse of {@link dayNumber}.
  *
@@ -76,8 +90,13 @@ export function civilParts(day: number): { year: number; month: number; day: num
  * Example: `isoDate(0)` is `1970-01-01`.
  */
 export function isoDate(day: number): string {
+  const known = written.get(day);
+  if (known !== undefined) return known;
   const parts = civilParts(day);
-  return write(parts.year, parts.month, parts.day);
+  const text = write(parts.year, parts.month, parts.day);
+  if (written.size >= MOST_WRITTEN) written.clear();
+  written.set(day, text);
+  return text;
 }
 
 /**
