@@ -168,7 +168,7 @@ export class SampleController {
 
   @RouteOf(sampleRoutes.fault)
   async fault(@Input() { params }: InputOf<typeof sampleRoutes.fault>) {
-    if (params.id === 'unforeseen') throw new TypeError('the secret is 42');
+    if (params.id === 'unforeseen') throw new TypeError('the secret is plum');
     if (params.id === 'contract') return { count: 'seven' } as unknown as { count: number };
     if (params.id === 'move') throw new IllegalMove('run', 'completed', 'cancelled', 'The run has ended.');
     if (params.id === 'database') await this.em.fork().execute(`select 'Ada'::int`);

@@ -20,7 +20,11 @@ export class TestClient {
   async send(
     method: string,
     path: string,
-    init: { body?: BodyInit; headers?: Record<string, string | null>; signal?: AbortSignal } = {},
+    init: {
+      body?: NonNullable<RequestInit['body']>;
+      headers?: Record<string, string | null>;
+      signal?: AbortSignal;
+    } = {},
   ): Promise<Response> {
     const headers: Record<string, string | null> = {
       'x-forwarded-for': this.ip,

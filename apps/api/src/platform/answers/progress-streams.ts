@@ -28,17 +28,27 @@ export class ProgressStreams implements BeforeApplicationShutdown {
   async start({ look }: ProgressStream): Promise<Readable> {
     const first = await look();
     const controller = new AbortController();
-    this.open.add(controller);
-    const stream = Readable.from(this.events(first, look, controller.signal), { objectMode: false });
-    stream.once('close', () => {
-      controller.abort();
-      this.open.delete(controller);
+    const stream = new Readable({
+      read: () => undefined,
+      destroy: (error, done) => {
+        controller.abort();
+        this.open.delete(controller);
+        done(error);
+      },
     });
+    this.open.add(controller);
+    void this.feed(stream, first, look, controller.signal);
     return stream;
   }
 
   beforeApplicationShutdown(): void {
     for (const controller of this.open) controller.abort();
+  }
+
+  /** Events are small and few, so a page that reads slowly may have some waiting in memory. */
+  private async feed(stream: Readable, first: Progress<unknown>, look: ProgressStream['look'], signal: AbortSignal) {
+    for await (const text of this.events(first, look, signal)) stream.push(text);
+    if (!stream.destroyed) stream.push(null);
   }
 
   private async *events(first: Progress<unknown>, look: ProgressStream['look'], signal: AbortSignal) {
