@@ -5,7 +5,7 @@ export type DatedAmount = readonly [date: string, amount: number];
 
 /** Puts dated amounts as a window: what is paid in first opens it, what is paid out last closes it. `scale` makes amounts whole. */
 export function windowOfInvestor(amounts: readonly DatedAmount[], scale = 100): WindowInput {
-  const dates = amounts.map(([date]) => date).sort();
+  const dates = amounts.map(([date]) => date).toSorted();
   const openedOn = dates[0]!;
   const closedOn = dates[dates.length - 1]!;
   const whole = (amount: number): number => Math.round(amount * scale);

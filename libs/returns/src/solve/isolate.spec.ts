@@ -25,7 +25,7 @@ describe('isolation of every root', () => {
   it.each([[[2, 3]], [[1, 2, 3, 4, 5]], [[0.5, 0.25, 8]], [[1, 1.0001, 1.0002]], [[3, 4, 5, 6, 7, 8, 9]]])(
     'finds simple roots %j',
     (roots) => {
-      const sorted = [...roots].sort((a, b) => a - b);
+      const sorted = roots.toSorted((a, b) => a - b);
       const found = rootsOf(roots, 2 ** 20);
       expect(found.length).toBe(roots.length);
       found.forEach((root, index) => expect(root / sorted[index]! - 1).toBeCloseTo(0, 6));

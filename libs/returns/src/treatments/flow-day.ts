@@ -1,4 +1,4 @@
-import type { ReturnPolicy } from '../treatments/return-policy.js';
+import type { ReturnPolicy } from './return-policy.js';
 
 /** A quarter end that figures were struck at, the version they were struck from, and the version of the balance now in force there. */
 export interface Close {

@@ -33,7 +33,7 @@ function plugBack(window: WindowInput, root: string, spanDays: number): { residu
   const lag = { start: 1, mid: 0.5, end: 0 }[window.timing];
   const byDate = new Map<string, number>();
   for (const { date, cents } of window.flows) byDate.set(date, (byDate.get(date) ?? 0) + cents);
-  const dates = [...byDate].filter(([, cents]) => cents !== 0).sort(([a], [b]) => (a < b ? -1 : 1));
+  const dates = [...byDate].filter(([, cents]) => cents !== 0).toSorted(([a], [b]) => (a < b ? -1 : 1));
   const start =
     window.openingCents !== 0 || dates.length === 0 ? dayNumber(window.openedOn) : dayNumber(dates[0]![0]) - lag;
   const end = start + spanDays;
@@ -95,7 +95,7 @@ describe('properties of the rate', () => {
           { date, cents: 0 },
           { date, cents: part % 1000 },
         ]);
-        expect(answerOf({ ...window, flows: split.reverse() })).toEqual(answerOf(window));
+        expect(answerOf({ ...window, flows: split.toReversed() })).toEqual(answerOf(window));
       }),
       RUNS,
     );

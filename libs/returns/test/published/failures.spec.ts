@@ -301,7 +301,7 @@ describe('published failures', () => {
       { date: '2020-02-01', cents: -50 },
     ];
     const window = { ...empty, openingCents: 1000, closingCents: 1100 };
-    expect(answerOf({ ...window, flows })).toEqual(answerOf({ ...window, flows: [...flows].reverse() }));
+    expect(answerOf({ ...window, flows })).toEqual(answerOf({ ...window, flows: flows.toReversed() }));
     expect(() => answerOf({ ...window, flows: [{ date: '2019-12-31', cents: 5 }] })).toThrow(
       'flows[0].date is "2019-12-31"',
     );
