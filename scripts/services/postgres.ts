@@ -49,7 +49,7 @@ export async function startPostgres(options: PostgresOptions): Promise<RunningPo
   const folder = serviceFolder(options.dataFolder, 'postgres', account);
   const cluster = join(folder, 'cluster');
   if (!existsSync(cluster)) await makeCluster(folder, cluster, account, options.adminPassword);
-  await clearLeftover(cluster);
+  await stopLeftoverPostgres(folder);
   for (let attempt = 1; ; attempt++) {
     const port = options.port ?? (await freePort());
     try {
@@ -92,7 +92,8 @@ async function makeCluster(folder: string, cluster: string, account: ServiceAcco
 }
 
 /** A killed launcher leaves the server running, a power cut leaves the server's note of its process id. */
-async function clearLeftover(cluster: string): Promise<void> {
+export async function stopLeftoverPostgres(folder: string): Promise<void> {
+  const cluster = join(folder, 'cluster');
   const note = join(cluster, 'postmaster.pid');
   if (!existsSync(note)) return;
   const pid = Number(readFileSync(note, 'utf8').split('\n')[0]);

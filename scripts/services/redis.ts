@@ -30,7 +30,7 @@ export interface RunningRedis extends RunningService {
 export async function startRedis(options: RedisOptions): Promise<RunningRedis> {
   const account = serviceAccount('redis');
   const folder = serviceFolder(options.dataFolder, 'redis', account);
-  await clearLeftover(folder);
+  await stopLeftoverRedis(folder);
   for (let attempt = 1; ; attempt++) {
     try {
       return await launch(folder, account, options.port ?? (await freePort()), options);
@@ -41,7 +41,8 @@ export async function startRedis(options: RedisOptions): Promise<RunningRedis> {
   }
 }
 
-async function clearLeftover(folder: string): Promise<void> {
+/** A killed launcher leaves the server running, a power cut leaves its note of its process id. */
+export async function stopLeftoverRedis(folder: string): Promise<void> {
   const note = join(folder, 'redis.pid');
   if (!existsSync(note)) return;
   const pid = Number(readFileSync(note, 'utf8'));

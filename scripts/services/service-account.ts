@@ -1,6 +1,6 @@
 import { execFileSync, spawnSync } from 'node:child_process';
 import { createHash } from 'node:crypto';
-import { chmodSync, chownSync, mkdirSync } from 'node:fs';
+import { chmodSync, chownSync, mkdirSync, rmSync } from 'node:fs';
 import { join } from 'node:path';
 
 /** Under whose name a service runs; null means under the name of whoever started us. */
@@ -30,10 +30,16 @@ export function serviceAccount(user: string): ServiceAccount | null {
 export function serviceFolder(dataFolder: string, service: string, account: ServiceAccount | null): string {
   const inside = ownedFolder(join(dataFolder, service), account);
   if (!account || reaches(account, inside)) return inside;
+  rmSync(inside, { recursive: true });
+  const outside = outsideFolder(dataFolder);
+  mkdirSync(outside, { recursive: true, mode: 0o755 });
+  return ownedFolder(join(outside, service), account);
+}
+
+/** Where a data folder's services keep what its own place does not allow. */
+export function outsideFolder(dataFolder: string): string {
   const digest = createHash('sha256').update(dataFolder).digest('hex').slice(0, 12);
-  const base = `/var/lib/quarterpoise/${digest}`;
-  mkdirSync(base, { recursive: true, mode: 0o755 });
-  return ownedFolder(join(base, service), account);
+  return `/var/lib/quarterpoise/${digest}`;
 }
 
 /** Makes the folder if need be and gives it to the account, closed to everybody else. */

@@ -1,12 +1,10 @@
 import { mkdirSync, rmSync } from 'node:fs';
 import { join, resolve } from 'node:path';
-import { Client } from 'pg';
-// this one file rather than the library's entry: services must start quickly, and also while a library is being changed
-import { createDatabase, provisionRoles } from '../../libs/database/src/security/provision-roles.js';
 import { type DebianPackage, ensurePackages } from './debian-packages.js';
 import { type ExternalServices, externalServices } from './external-services.js';
 import { startIdentityProvider } from './identity-provider.js';
 import { takeDataFolder } from './launcher-lock.js';
+import { provisionDatabase } from './local-database.js';
 import { startMailServer } from './mail-server.js';
 import { startPostgres } from './postgres.js';
 import { startRedis } from './redis.js';
@@ -45,8 +43,6 @@ export interface ServiceAddresses {
 }
 
 export interface Services extends ServiceAddresses {
-  /** Folders outside the data folder that hold data of these services; to be removed with it. */
-  readonly outsideFolders: readonly string[];
   stop(): Promise<void>;
 }
 
@@ -93,7 +89,7 @@ export async function startServices(options: ServicesOptions): Promise<Services>
         )
       : null;
     const database = postgres
-      ? await prepareDatabase(postgres.adminUrl, options.database ?? 'quarterpoise', options.rolePasswords ?? secrets)
+      ? await provisionDatabase(postgres.adminUrl, options.database ?? 'quarterpoise', options.rolePasswords ?? secrets)
       : external.database;
     const redis = wanted.has('redis') ? keep(await startRedis({ dataFolder, password: secrets.redisPassword })) : null;
     const mail = wanted.has('mail') ? await startMailServer() : null;
@@ -112,8 +108,7 @@ export async function startServices(options: ServicesOptions): Promise<Services>
       processes: Object.fromEntries([postgres, redis].flatMap((one) => (one ? [[one.name, one.pid]] : []))),
     };
     writePrivately(join(dataFolder, 'services.json'), addresses);
-    const folders = [postgres?.folder, redis?.folder].filter((folder) => folder !== undefined);
-    return { ...addresses, outsideFolders: folders.filter((folder) => !folder.startsWith(dataFolder)), stop };
+    return { ...addresses, stop };
   } catch (error) {
     await stop().catch(() => undefined);
     throw error;
@@ -135,24 +130,4 @@ function packagesFor(services: ReadonlySet<ServiceName>): DebianPackage[] {
     ...(services.has('postgres') ? ['postgresql-15' as const] : []),
     ...(services.has('redis') ? ['redis-server' as const] : []),
   ];
-}
-
-/** Roles and database, at the first start and again without harm; the schema is a matter of the migrations. */
-async function prepareDatabase(
-  adminUrl: string,
-  name: string,
-  passwords: { readonly ownerPassword: string; readonly appPassword: string },
-): Promise<{ ownerUrl: string; appUrl: string }> {
-  await provisionRoles(adminUrl, { ownerPassword: passwords.ownerPassword, appPassword: passwords.appPassword });
-  const client = new Client({ connectionString: adminUrl });
-  await client.connect();
-  const { rowCount } = await client.query('select 1 from pg_database where datname = $1', [name]);
-  await client.end();
-  if (!rowCount) await createDatabase(adminUrl, name);
-  const as = (user: string, password: string) =>
-    Object.assign(new URL(adminUrl), { username: user, password, pathname: `/${name}` }).toString();
-  return {
-    ownerUrl: as('quarterpoise_owner', passwords.ownerPassword),
-    appUrl: as('quarterpoise_app', passwords.appPassword),
-  };
 }
