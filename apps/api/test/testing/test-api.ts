@@ -79,7 +79,8 @@ export async function startTestApi(
         await factory.participant(on.planId ?? (await factory.plan()), { claimedBy: personId });
         return { personId, email };
       }
-      const where = hat === 'operator' || on.sponsorId || on.planId ? on : { planId: await factory.plan() };
+      const isPlaced = on.sponsorId !== undefined || on.planId !== undefined;
+      const where = hat === 'operator' ? {} : isPlaced ? on : { planId: await factory.plan() };
       return { personId: await factory.person({ ...shared, ...where, role: hat }), email };
     },
     async signIn(email) {
