@@ -71,6 +71,13 @@ describe('streams', () => {
       }
     });
 
+    it('end without "finished" when the person signs out', async () => {
+      const leaving = await api.signIn((await api.person('auditor')).email);
+      const response = await leaving.send('GET', '/sample/events/own');
+      await leaving.post('/auth/sign-out');
+      expect(await response.text()).not.toContain('finished');
+    });
+
     it('end when the service stops, which does not wait for them', async () => {
       const stopping = await startTestApi(composition());
       const reader = await stopping.signIn((await stopping.person('administrator')).email);

@@ -8,10 +8,14 @@ import {
 } from '@nestjs/common';
 import type { RouteDefinition } from '@quarterpoise/dto';
 import type { FastifyReply, FastifyRequest } from 'fastify';
+import type { Redis } from 'ioredis';
 import { Readable } from 'node:stream';
 import { mergeMap, type Observable } from 'rxjs';
 import { ENVIRONMENT, type Environment } from '../../config/env.js';
+import { ProblemException } from '../problems/problem.exception.js';
+import { REDIS } from '../redis.js';
 import { ROUTE } from '../routing/route-of.decorator.js';
+import { isSessionAlive } from '../session/redis-session.store.js';
 import { CsvDownload, PreparedJson, ProgressStream, Tagged } from './answers.js';
 import { ProgressStreams } from './progress-streams.js';
 
@@ -22,6 +26,7 @@ export class AnswerInterceptor implements NestInterceptor {
 
   constructor(
     private readonly streams: ProgressStreams,
+    @Inject(REDIS) private readonly redis: Redis,
     @Inject(ENVIRONMENT) environment: Environment,
   ) {
     this.isProduction = environment.mode === 'production';
@@ -36,10 +41,20 @@ export class AnswerInterceptor implements NestInterceptor {
     return next.handle().pipe(mergeMap((answer) => this.send(route, answer, request, reply)));
   }
 
+  /** A stream outlives the request's own check of the sign-in, so each look checks again. */
+  private whileSignedIn({ look }: ProgressStream, { session, person }: FastifyRequest): ProgressStream {
+    if (!person) return new ProgressStream(look);
+    return new ProgressStream(async () => {
+      if (!(await isSessionAlive(this.redis, session.sessionId))) throw new ProblemException('not-signed-in');
+      return look();
+    });
+  }
+
   private async send(route: RouteDefinition, answer: unknown, request: FastifyRequest, reply: FastifyReply) {
     if (answer instanceof ProgressStream) {
       reply.header('cache-control', 'no-cache').header('x-accel-buffering', 'no');
-      return new StreamableFile(await this.streams.start(answer), { type: 'text/event-stream' });
+      const stream = await this.streams.start(this.whileSignedIn(answer, request));
+      return new StreamableFile(stream, { type: 'text/event-stream' });
     }
     reply.header('cache-control', 'no-store');
     if (answer instanceof CsvDownload) {

@@ -37,7 +37,7 @@ export class ProgressStreams implements BeforeApplicationShutdown {
       },
     });
     this.open.add(controller);
-    void this.feed(stream, first, look, controller.signal);
+    this.feed(stream, first, look, controller.signal).catch((error: Error) => stream.destroy(error));
     return stream;
   }
 

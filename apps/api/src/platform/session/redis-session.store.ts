@@ -7,9 +7,14 @@ export const IDLE_SECONDS = 30 * 60;
 /** … and after twelve hours in any case. */
 export const ABSOLUTE_SECONDS = 12 * 60 * 60;
 
-const PREFIX = 'session:';
+const keyOf = (id: string) => `session:${id}`;
 
 type Done = (error?: unknown) => void;
+
+/** Whether a sign-in is still there, without putting its end off: an open page that only listens is not somebody at work. */
+export async function isSessionAlive(redis: Redis, id: string): Promise<boolean> {
+  return (await redis.exists(keyOf(id))) === 1;
+}
 
 /**
  * Sign-ins in Redis. Reading one puts its idle end off in the same command, so that a request costs one round trip and no write of ours.
@@ -33,21 +38,21 @@ export class RedisSessionStore implements SessionStore {
     const left = this.secondsLeft(session);
     const writing =
       left > 0
-        ? this.redis.set(PREFIX + id, JSON.stringify(session), 'EX', Math.min(IDLE_SECONDS, left))
-        : this.redis.del(PREFIX + id);
+        ? this.redis.set(keyOf(id), JSON.stringify(session), 'EX', Math.min(IDLE_SECONDS, left))
+        : this.redis.del(keyOf(id));
     writing.then(() => done(), done);
   }
 
   destroy(id: string, done: Done): void {
-    this.redis.del(PREFIX + id).then(() => done(), done);
+    this.redis.del(keyOf(id)).then(() => done(), done);
   }
 
   private async read(id: string): Promise<Session | null> {
-    const text = await this.redis.getex(PREFIX + id, 'EX', IDLE_SECONDS);
+    const text = await this.redis.getex(keyOf(id), 'EX', IDLE_SECONDS);
     if (text === null) return null;
     const session = JSON.parse(text) as Session;
     if (this.secondsLeft(session) > 0) return session;
-    await this.redis.del(PREFIX + id);
+    await this.redis.del(keyOf(id));
     return null;
   }
 
