@@ -40,7 +40,12 @@ export default defineConfig({
         ...backend,
         test: {
           name: 'integration',
-          include: ['libs/*/test/**/*.int.spec.ts', 'apps/*/test/**/*.int.spec.ts', 'seeds/**/*.int.spec.ts'],
+          include: [
+            'libs/*/test/**/*.int.spec.ts',
+            'apps/*/test/**/*.int.spec.ts',
+            'seeds/**/*.int.spec.ts',
+            'scripts/**/*.int.spec.ts',
+          ],
           exclude: ['**/node_modules/**', '**/dist/**'],
           globalSetup: 'scripts/test-services.setup.ts',
           pool: 'forks',

@@ -1,6 +1,7 @@
 import { spawn } from 'node:child_process';
-import { closeSync, openSync, readFileSync } from 'node:fs';
+import { closeSync, openSync } from 'node:fs';
 import { PROJECT_ROOT } from '../project-root.js';
+import { lastWords } from '../services/last-words.js';
 import { stopProcess } from '../services/process-identity.js';
 import type { RunningService } from '../services/running-service.js';
 import type { Environment } from './product-environment.js';
@@ -62,18 +63,4 @@ export async function runChild(options: ChildOptions): Promise<void> {
   });
   if (code !== 0)
     throw new Error(`${options.name} failed: ${lastWords(options.logFile)} (all of it: ${options.logFile})`);
-}
-
-/** The line that names the error, if one does; otherwise the last one. Lines of the structured log give their message. */
-export function lastWords(logFile: string): string {
-  const lines = readFileSync(logFile, 'utf8')
-    .split('\n')
-    .filter((line) => line.trim() !== '');
-  const line = lines.findLast((one) => /^\w*Error\b|"level":(50|60)/.test(one)) ?? lines.at(-1) ?? 'it said nothing';
-  try {
-    const { msg, err } = JSON.parse(line) as { msg?: string; err?: { message?: string } };
-    return err?.message ?? msg ?? line;
-  } catch {
-    return line;
-  }
 }

@@ -29,7 +29,7 @@ export interface ProductOptions {
   readonly environment?: NodeJS.ProcessEnv;
   /** Told when any of its parts ends that nobody has stopped. */
   onCrash(reason: string): void;
-  say(line: string): void;
+  readonly say: (line: string) => void;
 }
 
 export interface Product {

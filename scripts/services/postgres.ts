@@ -16,6 +16,7 @@ import { setTimeout as pause } from 'node:timers/promises';
 import { promisify } from 'node:util';
 import { Client } from 'pg';
 import { freePort } from './free-port.js';
+import { lastWords } from './last-words.js';
 import { commandLine, stopProcess } from './process-identity.js';
 import { ownedFolder, type ServiceAccount, serviceAccount, serviceFolder } from './service-account.js';
 import type { RunningService } from './running-service.js';
@@ -83,9 +84,12 @@ async function makeCluster(folder: string, cluster: string, account: ServiceAcco
     );
     renameSync(draft, cluster);
   } catch (error) {
-    throw new Error(`PostgreSQL could not set up its data folder ${folder}: ${lastLine((error as Error).message)}`, {
-      cause: error,
-    });
+    throw new Error(
+      `PostgreSQL could not set up its data folder ${folder}: ${(error as Error).message.trim().split('\n').at(-1)}`,
+      {
+        cause: error,
+      },
+    );
   } finally {
     rmSync(passwordFile, { force: true });
   }
@@ -133,7 +137,7 @@ async function launch(
     child.once('error', (error) => resolve(error.message));
     child.once('exit', () => {
       rmSync(socketFolder, { recursive: true, force: true });
-      resolve(lastLine(readFileSync(logFile, 'utf8')));
+      resolve(lastWords(logFile));
     });
   });
   child.unref();
@@ -175,5 +179,3 @@ async function ready(adminUrl: string): Promise<void> {
 function environment(): NodeJS.ProcessEnv {
   return { PATH: '/usr/bin:/bin', LC_ALL: 'C.UTF-8' };
 }
-
-const lastLine = (text: string) => text.trim().split('\n').at(-1) ?? '';

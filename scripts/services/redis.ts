@@ -4,6 +4,7 @@ import { join } from 'node:path';
 import { setTimeout as pause } from 'node:timers/promises';
 import { Redis } from 'ioredis';
 import { freePort } from './free-port.js';
+import { lastWords } from './last-words.js';
 import { commandLine, stopProcess } from './process-identity.js';
 import { serviceAccount, type ServiceAccount, serviceFolder } from './service-account.js';
 import type { RunningService } from './running-service.js';
@@ -90,7 +91,7 @@ async function launch(
   closeSync(log);
   const exited = new Promise<string>((resolve) => {
     child.once('error', (error) => resolve(error.message));
-    child.once('exit', () => resolve(readFileSync(logFile, 'utf8').trim().split('\n').at(-1) ?? ''));
+    child.once('exit', () => resolve(lastWords(logFile)));
   });
   child.unref();
   const redisUrl = `redis://:${options.password}@127.0.0.1:${port}`;
