@@ -5,9 +5,11 @@ export interface NavigationItem {
   /** Text under `shell:navigation`. */
   text: 'plans' | 'thisQuarter' | 'earlierQuarters' | 'findParticipant' | 'health';
   path: string;
+  /** Other addresses that belong to the entry. */
+  covers?: string;
 }
 
-const SPONSOR: readonly [NavigationItem] = [{ text: 'plans', path: paths.plans }];
+const SPONSOR: readonly [NavigationItem] = [{ text: 'plans', path: paths.plans, covers: '/quarters' }];
 
 /** What stands in the header for each hat; the first entry is the hat's home. */
 export const NAVIGATION: Record<Hat, readonly [NavigationItem, ...NavigationItem[]]> = {

@@ -1,5 +1,6 @@
 import type { RunTotals } from '@quarterpoise/dto';
 import { scaleLinear } from 'd3-scale';
+import { curveStepAfter, line } from 'd3-shape';
 import { useTranslation } from 'react-i18next';
 import { formatCount, formatPercent } from '../lib/format';
 import styles from './distribution-chart.module.css';
@@ -57,12 +58,12 @@ export function DistributionChart({ now, nowName, before, beforeName }: Distribu
   const y = scaleLinear([0, most], [HEIGHT - MARGIN.bottom, MARGIN.top]).nice(4);
   const barWidth = x(1) - x(0);
   const percent = (value: number) => formatPercent(value, i18n.language);
-  const outline = beforeBins
-    ? bins
-        .map((bin) => `V${y(beforeBins.get(bin) ?? 0)}H${x(bin + 1)}`)
-        .join('')
-        .replace(/^/, `M${x(from)},${y(0)}`)
-    : null;
+  const step = line<number>(
+    (bin) => x(bin),
+    (bin) => y(beforeBins?.get(bin) ?? 0),
+  ).curve(curveStepAfter);
+  // The outline goes up from the axis, along the steps, and back down to the axis.
+  const outline = beforeBins && `M${x(from)},${y(0)}L${step([...bins, to + 1])?.slice(1)}`;
 
   if (now.length === 0) return <p className="quiet">{t('distribution.empty')}</p>;
   return (
@@ -93,7 +94,7 @@ export function DistributionChart({ now, nowName, before, beforeName }: Distribu
             />
           );
         })}
-        {outline !== null && <path d={`${outline}V${y(0)}`} className={styles.outline} />}
+        {outline !== null && <path d={outline} className={styles.outline} />}
         {from <= 0 && to >= 0 && <line x1={x(0)} x2={x(0)} y1={MARGIN.top} y2={y(0)} className={styles.zero} />}
         {x.ticks(8).map((tick) => (
           <text key={tick} x={x(tick)} y={HEIGHT - 14} textAnchor="middle">

@@ -12,9 +12,9 @@ import { rememberCsrfToken } from '../lib/api-client';
 const files = import.meta.glob<Record<string, unknown>>('../i18n/*/*.json', { eager: true, import: 'default' });
 
 const resources: Record<string, Record<string, Record<string, unknown>>> = {};
-for (const [path, texts] of Object.entries(files)) {
+for (const [path, file] of Object.entries(files)) {
   const [, language = '', area = ''] = /i18n\/(\w+)\/([\w-]+)\.json$/.exec(path) ?? [];
-  (resources[language] ??= {})[area] = texts;
+  (resources[language] ??= {})[area] = file;
 }
 
 // All texts at once, so that tests see what people read.

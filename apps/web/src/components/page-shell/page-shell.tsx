@@ -1,6 +1,6 @@
 import type { ReactNode } from 'react';
 import { useTranslation } from 'react-i18next';
-import { Link, NavLink } from 'react-router-dom';
+import { Link, useLocation } from 'react-router-dom';
 import { useSession } from '../../lib/session';
 import { Mark } from '../mark';
 import { HatSwitch } from './hat-switch';
@@ -10,15 +10,26 @@ import { SignOutButton } from './sign-out-button';
 import { ThemeSwitch } from './theme-switch';
 
 interface PageShellProps {
-  navigation: readonly { text: string; path: string }[];
+  navigation: readonly { text: string; path: string; covers?: string }[];
   homePath: string;
   children: ReactNode;
+}
+
+/** The entry that the address belongs to: the longest path that begins it. */
+function currentEntry<Entry extends { path: string; covers?: string }>(entries: readonly Entry[], pathname: string) {
+  const begins = (path: string | undefined) =>
+    path !== undefined && (pathname === path || pathname.startsWith(`${path}/`)) ? path.length : 0;
+  const reach = (entry: Entry) => Math.max(begins(entry.path), begins(entry.covers));
+  const [best] = entries.toSorted((a, b) => reach(b) - reach(a));
+  return best && reach(best) > 0 ? best : undefined;
 }
 
 /** Header, navigation and main part of every screen behind the sign-in. Plain elements: it is part of everybody's first load. */
 export function PageShell({ navigation, homePath, children }: PageShellProps) {
   const { t } = useTranslation('shell');
   const { person } = useSession();
+  const { pathname } = useLocation();
+  const here = currentEntry(navigation, pathname);
   return (
     <>
       <a href="#main" className={styles.skip}>
@@ -32,9 +43,14 @@ export function PageShell({ navigation, homePath, children }: PageShellProps) {
           </Link>
           <nav aria-label={t('navigation.label')} className={styles.navigation}>
             {navigation.map((item) => (
-              <NavLink key={item.path} to={item.path} end={item.path === '/my'} className={styles.link ?? ''}>
+              <Link
+                key={item.path}
+                to={item.path}
+                className={styles.link}
+                aria-current={item === here ? (pathname === item.path ? 'page' : 'true') : undefined}
+              >
                 {t(`navigation.${item.text}`)}
-              </NavLink>
+              </Link>
             ))}
           </nav>
           <div className={styles.person}>

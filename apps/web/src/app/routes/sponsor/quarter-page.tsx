@@ -7,8 +7,8 @@ import { Loading } from '../../../components/loading';
 import { Page } from '../../../components/page';
 import { PublishPanel } from '../../../features/publication/components/publish-panel';
 import { useQuarter } from '../../../features/quarter/api/use-quarter';
+import { CheckStep } from '../../../features/quarter/components/check-step';
 import { CollectStep } from '../../../features/quarter/components/collect-step';
-import { FindingList } from '../../../features/quarter/components/finding-list';
 import { QuarterHistory } from '../../../features/quarter/components/quarter-history';
 import { QuarterStanding } from '../../../features/quarter/components/quarter-standing';
 import { QuarterSteps } from '../../../features/quarter/components/quarter-steps';
@@ -55,7 +55,7 @@ function stepContent(quarter: QuarterView): Record<Step, ReactNode> {
         filePath={(id) => paths.file(quarter.id, id)}
       />
     ),
-    check: <FindingList findings={quarter.findings.filter((finding) => finding.code !== 'file-missing')} />,
+    check: <CheckStep quarter={quarter} />,
     run: <RunPanel quarter={quarter} runPath={(id) => paths.run(quarter.id, id)} />,
     review: (
       <ReviewStep

@@ -9,12 +9,12 @@ const CHANGES = ['new', 'changed', 'reversed', 'unchanged'] as const;
 /** What loading the file would change (or has changed), and its totals by kind. */
 export function ChangePreview({ file, changes }: { file: ImportView; changes: NonNullable<ImportView['changes']> }) {
   const { t, i18n } = useTranslation('imports');
-  const isLoaded = file.state === 'committed';
+  const title = file.state === 'committed' ? 'done' : file.state === 'preview' ? 'would' : 'good';
   const number = (value: number) => <span className="figures">{formatCount(value, i18n.language)}</span>;
   return (
     <div className={styles.preview}>
       <section>
-        <h3>{isLoaded ? t('changes.done') : t('changes.would')}</h3>
+        <h3>{t(`changes.${title}`)}</h3>
         <dl className={styles.changes}>
           {CHANGES.map((name) => (
             <div key={name}>

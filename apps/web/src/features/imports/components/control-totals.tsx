@@ -40,11 +40,11 @@ export function ControlTotals({ stated, counted, kind, isMismatch }: ControlTota
         <caption>{t('totals.title')}</caption>
         <thead>
           <tr>
-            <td />
+            <th scope="col">{t('totals.total')}</th>
             <th scope="col">{t('totals.stated')}</th>
             <th scope="col">{t('totals.counted')}</th>
             <th scope="col">{t('totals.difference')}</th>
-            <td />
+            <th scope="col">{t('totals.outcome')}</th>
           </tr>
         </thead>
         <tbody>

@@ -1,3 +1,4 @@
+import { UploadOutlined } from '@ant-design/icons';
 import { useRef, useState } from 'react';
 import { useTranslation } from 'react-i18next';
 import styles from './imports.module.css';
@@ -43,7 +44,7 @@ export function FileDrop({ label, onFiles }: FileDropProps) {
         }}
       />
       <button type="button" className={styles.choose} onClick={() => field.current?.click()}>
-        {t('drop.choose')}
+        <UploadOutlined aria-hidden /> {t('drop.choose')}
       </button>
     </div>
   );

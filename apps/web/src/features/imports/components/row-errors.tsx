@@ -1,3 +1,4 @@
+import { DownloadOutlined } from '@ant-design/icons';
 import { Button } from 'antd';
 import { useTranslation } from 'react-i18next';
 import { ErrorState } from '../../../components/error-state';
@@ -18,7 +19,7 @@ export function RowErrors({ importId, errorCount }: { importId: string; errorCou
           {t('imports:errors.title', { count: errorCount, number: formatCount(errorCount, i18n.language) })}
         </h3>
         <a href={addressOf('imports.errors-file', { id: importId })} download>
-          {t('imports:errors.download')}
+          <DownloadOutlined aria-hidden /> {t('imports:errors.download')}
         </a>
       </div>
       {error && <ErrorState problem={error} size="inline" onRetry={() => void refresh()} />}

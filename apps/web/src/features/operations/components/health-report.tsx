@@ -15,18 +15,14 @@ export function HealthReport() {
       <p role="status" className={data.isReady ? styles.up : styles.down}>
         {data.isReady ? t('ready') : t('notReady')}
       </p>
-      {data.parts.length > 0 && (
-        <ul className={styles.parts}>
-          {data.parts.map((part) => (
-            <li key={part.name}>
-              <span>{t(`part.${part.name}`, { defaultValue: part.name })}</span>
-              <span className={part.isUp ? styles.up : styles.down}>
-                {part.isUp ? t('up') : t('down', { detail: part.detail })}
-              </span>
-            </li>
-          ))}
-        </ul>
-      )}
+      <ul className={styles.parts}>
+        {Object.entries(data.checks).map(([name, state]) => (
+          <li key={name}>
+            <span>{t(`part.${name}`, { defaultValue: name })}</span>
+            <span className={state === 'up' ? styles.up : styles.down}>{t(`state.${state}`)}</span>
+          </li>
+        ))}
+      </ul>
       <p className="quiet">{t('refresh')}</p>
     </div>
   );

@@ -26,7 +26,9 @@ export function QuarterSteps({ quarter, content }: QuarterStepsProps) {
                 <h2 id={`step-${step}`}>{t(`step.${step}.name`)}</h2>
                 <span className={styles.standing}>{t(`stepStanding.${standing}`)}</span>
               </header>
-              {standing === 'current' && <p className="quiet">{t(`step.${step}.now`)}</p>}
+              {standing === 'current' && quarter.state !== 'computing' && (
+                <p className="quiet">{t(`step.${step}.now`)}</p>
+              )}
               {content[step]}
             </section>
           </li>

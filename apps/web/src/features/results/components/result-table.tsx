@@ -60,7 +60,9 @@ export function ResultTable({ rows, label }: { rows: readonly ResultRow[]; label
               </td>
               <td>
                 {row.flagCodes.map((code) => t(`review:flag.${code}.name`, { defaultValue: code })).join(', ')}
-                {row.reason !== null && <span className="quiet"> {row.reason}</span>}
+                {row.reason !== null && (
+                  <span className="quiet"> {t(`figures:reason.${row.reason}`, { defaultValue: row.reason })}</span>
+                )}
               </td>
             </tr>
           ))}

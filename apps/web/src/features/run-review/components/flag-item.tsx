@@ -12,13 +12,12 @@ interface FlagItemProps {
   isCurrent: boolean;
   isMarked: boolean;
   canDecide: boolean;
-  onEnter(): void;
   onMark(): void;
   onAsk(decision: Decision): void;
 }
 
 /** One flag: whose, what it says, first estimate beside solved rate, and the decision. */
-export function FlagItem({ flag, isCurrent, isMarked, canDecide, onEnter, onMark, onAsk }: FlagItemProps) {
+export function FlagItem({ flag, isCurrent, isMarked, canDecide, onMark, onAsk }: FlagItemProps) {
   const { t, i18n } = useTranslation(['review', 'figures']);
   const isDecided = flag.decision !== null && flag.decision.decision !== 'reopened';
   const who =
@@ -31,7 +30,6 @@ export function FlagItem({ flag, isCurrent, isMarked, canDecide, onEnter, onMark
       tabIndex={isCurrent ? 0 : -1}
       aria-current={isCurrent}
       aria-label={`${name}, ${who}`}
-      onFocus={onEnter}
     >
       {canDecide && (
         <input

@@ -1,12 +1,13 @@
 import type { FlagRow } from '@quarterpoise/dto';
 import { Button } from 'antd';
-import { useEffect, useRef, useState, type KeyboardEvent } from 'react';
+import { useEffect, useRef, useState } from 'react';
 import { useTranslation } from 'react-i18next';
 import { EmptyState } from '../../../components/empty-state';
 import { ErrorState } from '../../../components/error-state';
 import { Loading } from '../../../components/loading';
 import { useDecideFlags, type Decision } from '../api/decide-flags';
 import { useFlags, type FlagFilter } from '../api/use-flags';
+import { entriesOf, useQueueKeys } from '../lib/use-queue-keys';
 import { DecisionDialog } from './decision-dialog';
 import { FlagFilters } from './flag-filters';
 import { FlagItem } from './flag-item';
@@ -17,9 +18,6 @@ interface FlagQueueProps {
   runId: string;
   canDecide: boolean;
 }
-
-const isTyping = (target: EventTarget) =>
-  target instanceof HTMLElement && target.closest('input, textarea, select, [role=combobox]');
 
 /** Flags worst first, to be worked down by keyboard or mouse: j and k move, x marks, a accepts, h holds, r reopens. */
 export function FlagQueue({ runId, canDecide }: FlagQueueProps) {
@@ -54,17 +52,17 @@ export function FlagQueue({ runId, canDecide }: FlagQueueProps) {
   const moveTo = (to: number) => {
     const next = Math.min(Math.max(to, 0), last);
     setPosition(next);
-    list.current?.querySelectorAll<HTMLElement>(':scope > li')[next]?.focus();
+    entriesOf(list.current)[next]?.focus();
   };
 
   useEffect(() => {
     // A decision empties places in the list; the focus stays in the queue instead of falling to the top of the page.
-    if (asked === null && told !== '') list.current?.querySelectorAll<HTMLElement>(':scope > li')[current]?.focus();
+    if (asked === null && told !== '') entriesOf(list.current)[current]?.focus();
   }, [asked, told, current, flags.items.length]);
 
-  function onKeyDown(event: KeyboardEvent) {
-    if (isTyping(event.target) || event.ctrlKey || event.metaKey || event.altKey || asked) return;
-    const moves: Record<string, () => void> = {
+  useQueueKeys(list, {
+    onEnter: setPosition,
+    keys: {
       j: () => moveTo(current + 1),
       ArrowDown: () => moveTo(current + 1),
       k: () => moveTo(current - 1),
@@ -75,12 +73,8 @@ export function FlagQueue({ runId, canDecide }: FlagQueueProps) {
       a: () => ask('accepted'),
       h: () => ask('held'),
       r: () => ask('reopened'),
-    };
-    const move = moves[event.key];
-    if (!move) return;
-    event.preventDefault();
-    move();
-  }
+    },
+  });
 
   return (
     <div className={styles.queue}>
@@ -114,7 +108,7 @@ export function FlagQueue({ runId, canDecide }: FlagQueueProps) {
           text={filter.undecided ? t('review:empty.decidedText') : t('review:empty.noneText')}
         />
       )}
-      <ul ref={list} className={styles.flags} onKeyDown={onKeyDown} aria-label={t('review:title')}>
+      <ul ref={list} className={styles.flags} aria-label={t('review:title')}>
         {flags.items.map((flag, index) => (
           <FlagItem
             key={flag.id}
@@ -122,7 +116,6 @@ export function FlagQueue({ runId, canDecide }: FlagQueueProps) {
             isCurrent={index === current}
             isMarked={marked.has(flag.id)}
             canDecide={canDecide}
-            onEnter={() => setPosition(index)}
             onMark={() => mark(flag.id)}
             onAsk={(decision) => ask(decision, [flag])}
           />

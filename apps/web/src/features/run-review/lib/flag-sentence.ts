@@ -19,7 +19,12 @@ export function formatFigure(name: string, value: Figure, language: string): str
  */
 export function flagSentence(flag: Pick<FlagRow, 'code' | 'figures'>, t: TFunction, language: string): string {
   const values = Object.fromEntries(
-    Object.entries(flag.figures).map(([name, value]) => [name, formatFigure(name, value, language)]),
+    Object.entries(flag.figures).map(([name, value]) => [
+      name,
+      name === 'reason'
+        ? t(`figures:reason.${value}`, { defaultValue: String(value) })
+        : formatFigure(name, value, language),
+    ]),
   );
   const key = `review:flag.${flag.code}.sentence`;
   const pattern = t(key, { defaultValue: '', skipInterpolation: true });

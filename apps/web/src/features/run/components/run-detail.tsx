@@ -33,22 +33,24 @@ export function RunDetail({ run, quarterName, lastQuarter, canCancel }: RunDetai
       {run.totals && (
         <>
           <section>
-            <h2>{t('totals')}</h2>
-            <TotalsList totals={run.totals} />
-          </section>
-          <section>
             <h2>{t('ties')}</h2>
             <TiesTable ties={run.totals.ties} />
           </section>
-          <section>
-            <h2>{t('distribution')}</h2>
-            <DistributionChart
-              now={run.totals.distribution}
-              nowName={quarterName}
-              before={lastQuarter?.distribution ?? null}
-              beforeName={lastQuarter?.name ?? null}
-            />
-          </section>
+          <div className={styles.pair}>
+            <section>
+              <h2>{t('totals')}</h2>
+              <TotalsList totals={run.totals} />
+            </section>
+            <section>
+              <h2>{t('distribution')}</h2>
+              <DistributionChart
+                now={run.totals.distribution}
+                nowName={quarterName}
+                before={lastQuarter?.distribution ?? null}
+                beforeName={lastQuarter?.name ?? null}
+              />
+            </section>
+          </div>
         </>
       )}
       <section>

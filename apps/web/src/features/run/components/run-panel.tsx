@@ -27,12 +27,14 @@ export function RunPanel({ quarter, runPath }: RunPanelProps) {
       ))}
       {isStale && <Note tone="attention">{t('stale')}</Note>}
       {quarter.currentRun && <RunOutcome run={quarter.currentRun} path={runPath(quarter.currentRun.id)} />}
-      <StartRun
-        quarterId={quarter.id}
-        run={action('run')}
-        rehearse={action('rehearse')}
-        isAgain={quarter.currentRun !== null}
-      />
+      {!going.some((run) => !run.isRehearsal) && (
+        <StartRun
+          quarterId={quarter.id}
+          run={action('run')}
+          rehearse={action('rehearse')}
+          isAgain={quarter.currentRun !== null}
+        />
+      )}
       <RunList
         runs={quarter.runs.filter((run) => run.id !== quarter.currentRun?.id && !going.includes(run))}
         runPath={runPath}

@@ -25,7 +25,7 @@ export function StartRun({ quarterId, run, rehearse, isAgain }: StartRunProps) {
         {run && (
           <ConfirmButton
             label={isAgain ? t('start.again') : t('start.button')}
-            type="primary"
+            type={isAgain ? 'default' : 'primary'}
             disabled={!run.allowed}
             title={isAgain ? t('start.againTitle') : t('start.title')}
             text={isAgain ? t('start.againText') : t('start.text')}

@@ -40,20 +40,22 @@ export function SignOffSheet({ sheet, quarterId, canSign, signed, sample }: Sign
             {!isTied && <Note tone="attention">{t('tiesDiffer')}</Note>}
             <TiesTable ties={run.totals.ties} />
           </section>
-          <section>
-            <h2>{t('totals')}</h2>
-            <TotalsList totals={run.totals} />
-          </section>
-          <section>
-            <h2>{t('distribution')}</h2>
-            <DistributionChart
-              now={run.totals.distribution}
-              nowName={formatQuarter(sheet.quarter.code, i18n.language)}
-              before={sheet.lastQuarter?.distribution ?? null}
-              beforeName={sheet.lastQuarter ? formatQuarter(sheet.lastQuarter.code, i18n.language) : null}
-            />
-            {!sheet.lastQuarter && <p className="quiet">{t('noLastQuarter')}</p>}
-          </section>
+          <div className={styles.pair}>
+            <section>
+              <h2>{t('totals')}</h2>
+              <TotalsList totals={run.totals} />
+            </section>
+            <section>
+              <h2>{t('distribution')}</h2>
+              <DistributionChart
+                now={run.totals.distribution}
+                nowName={formatQuarter(sheet.quarter.code, i18n.language)}
+                before={sheet.lastQuarter?.distribution ?? null}
+                beforeName={sheet.lastQuarter ? formatQuarter(sheet.lastQuarter.code, i18n.language) : null}
+              />
+              {!sheet.lastQuarter && <p className="quiet">{t('noLastQuarter')}</p>}
+            </section>
+          </div>
         </>
       )}
       <section>

@@ -1,12 +1,12 @@
 import { render, screen, waitFor } from '@testing-library/react';
 import { createMemoryRouter, RouterProvider } from 'react-router-dom';
 import { describe, expect, it } from 'vitest';
-import { SignedIn } from '../app/signed-in';
-import { returnAddress } from '../app/paths';
+import { SignedIn } from './signed-in';
+import { returnAddress } from './paths';
 import { fakeApi, Refusal } from '../testing/fake-api';
 import { sessionOf, TestProviders } from '../testing/render-screen';
-import { SessionProvider } from './session';
-import { useRoute } from './swr';
+import { SessionProvider } from '../lib/session';
+import { useRoute } from '../lib/swr';
 
 function Plans() {
   const { data } = useRoute('plans.list', {});
