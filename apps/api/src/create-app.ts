@@ -58,7 +58,8 @@ export async function createApp(
     customSiteTitle: 'Quarterpoise API',
   });
   if (environment.http.webFolder !== null) await serveWebPages(app, environment.http.webFolder);
-  app.enableShutdownHooks();
+  // a stop that was asked for is a success: exit code 0
+  app.enableShutdownHooks([], { useProcessExit: true });
   await app.init();
   return app;
 }

@@ -14,6 +14,11 @@ const SECRETS = [
   '*.password',
 ];
 
+/** Middleware sees an address that has lost its beginning; the whole one is kept beside it. */
+function addressOf(request: IncomingMessage & { originalUrl?: string }): string {
+  return request.originalUrl ?? request.url ?? '';
+}
+
 /** One JSON line per request: id, method, address without its query (searches hold names), status and time. No person, no amounts. */
 export function loggingOptions(environment: Environment): Params {
   return {
@@ -30,7 +35,7 @@ export function loggingOptions(environment: Environment): Params {
         }),
         res: (response: ServerResponse) => ({ status: response.statusCode }),
       },
-      autoLogging: { ignore: (request: IncomingMessage) => !request.url?.startsWith('/api/v1/') },
+      autoLogging: { ignore: (request: IncomingMessage) => !addressOf(request).startsWith('/api/v1/') },
     },
   };
 }
