@@ -65,7 +65,6 @@ export async function startProduct(options: ProductOptions): Promise<Product> {
   const building = build();
   building.catch(() => undefined);
   try {
-    const ports = await choosePorts(options);
     options.say('Starting services …');
     services = await startServices({
       dataFolder,
@@ -75,6 +74,8 @@ export async function startProduct(options: ProductOptions): Promise<Product> {
       onCrash: crashed,
     });
     await stopLeftoverChildren(dataFolder);
+    // after that, as they may hold the port that is wanted
+    const ports = await choosePorts(options);
     const secrets = secretsOf(dataFolder);
     await prepareDatabase(dataFolder, services, productEnvironment(dataFolder, services, secrets, ports), options.say);
     // anew, as the demo's sign-ins may have come into being

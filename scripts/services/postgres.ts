@@ -23,6 +23,8 @@ import type { RunningService } from './running-service.js';
 
 export const POSTGRES_PROGRAMS = '/usr/lib/postgresql/15/bin';
 const SUPERUSER = 'quarterpoise_admin';
+/** Beginning of its name. The path of a unix socket may have 107 bytes at most, which the project's own folder need not leave room for. */
+const SOCKET_FOLDER = join(tmpdir(), 'qp-socket-');
 const READY_WITHIN = 60_000;
 /** SIGINT is PostgreSQL's fast shutdown: open transactions are rolled back and everything is written; SIGQUIT recovers at the next start. */
 const STOP_STEPS = [
@@ -100,8 +102,11 @@ export async function stopLeftoverPostgres(folder: string): Promise<void> {
   const cluster = join(folder, 'cluster');
   const note = join(cluster, 'postmaster.pid');
   if (!existsSync(note)) return;
-  const pid = Number(readFileSync(note, 'utf8').split('\n')[0]);
+  // its first line is the process, its fifth the folder of the socket
+  const lines = readFileSync(note, 'utf8').split('\n');
+  const pid = Number(lines[0]);
   if (commandLine(pid).includes(cluster)) await stopProcess(pid, STOP_STEPS);
+  if (lines[4]?.startsWith(SOCKET_FOLDER)) rmSync(lines[4], { recursive: true, force: true });
   rmSync(note, { force: true });
 }
 
@@ -112,8 +117,7 @@ async function launch(
   port: number,
   options: PostgresOptions,
 ): Promise<RunningPostgres> {
-  // the path of a unix socket may have 107 bytes at most, which the project's own folder need not leave room for
-  const socketFolder = ownedFolder(mkdtempSync(join(tmpdir(), 'qp-')), account);
+  const socketFolder = ownedFolder(mkdtempSync(SOCKET_FOLDER), account);
   const settings = {
     listen_addresses: '127.0.0.1',
     port: String(port),
