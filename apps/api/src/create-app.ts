@@ -60,7 +60,13 @@ export async function createApp(
   if (environment.http.webFolder !== null) await serveWebPages(app, environment.http.webFolder);
   // a stop that was asked for is a success: exit code 0
   app.enableShutdownHooks([], { useProcessExit: true });
-  await app.init();
+  try {
+    await app.init();
+  } catch (error) {
+    // what was opened on the way is closed again, so that a process that may not start ends
+    await app.close().catch(() => undefined);
+    throw error;
+  }
   return app;
 }
 

@@ -122,6 +122,24 @@ describe('signing in', () => {
     await api.signIn(email);
   });
 
+  it('counts guesses that come at the same moment', async () => {
+    const { email } = await api.person('auditor');
+    const client = api.client();
+    const guesses = Array.from({ length: 25 }, (_, n) =>
+      client.post('/auth/sign-in', { email, password: `guess ${n}` }),
+    );
+    const statuses = (await Promise.all(guesses)).map((answer) => answer.status).toSorted();
+    expect(statuses).toEqual([...Array(10).fill(401), ...Array(15).fill(429)]);
+  });
+
+  it('does not count what turned out well', async () => {
+    const { email } = await api.person('auditor');
+    const client = api.client();
+    for (let n = 0; n < 12; n += 1) {
+      expect((await client.post('/auth/sign-in', { email, password: PASSWORD })).status).toBe(200);
+    }
+  });
+
   it('ends with signing out, for whoever kept the cookie as well', async () => {
     const { personId, email } = await api.person('auditor');
     const client = await api.signIn(email);

@@ -22,6 +22,8 @@ interface StoredAnswer {
 
 /** Longer than any write takes; the lock of a process that died is gone after this. */
 const LOCK_SECONDS = 60;
+/** Only by whoever holds it: after its end another request may. */
+const RELEASE = `if redis.call('GET', KEYS[1]) == ARGV[1] then redis.call('DEL', KEYS[1]) end`;
 const WAIT_SECONDS = 20;
 const WAIT_STEP_MS = 100;
 
@@ -74,7 +76,7 @@ export class IdempotencyInterceptor implements NestInterceptor {
       await this.store(person, key, route, digest, answer);
       return answer;
     } finally {
-      await this.redis.del(lock).catch(() => undefined);
+      await this.redis.eval(RELEASE, 1, lock, request.id).catch(() => undefined);
     }
   }
 

@@ -36,11 +36,10 @@ export class SignInService {
   /** @throws ProblemException wrong-credentials, too-many-requests, or forbidden for a person without any role. */
   async signIn(email: string, password: string, from: { ip: string; requestId: string }): Promise<SignedIn> {
     const noSoonerThan = pause(REFUSAL_MS);
-    await this.throttle.check(email, from.ip);
+    await this.throttle.take(email, from.ip);
     const credentials = await this.identity.credentialsOf(email);
     const isRight = await verify(credentials?.passwordHash ?? (await this.nobodysHash), password);
     if (!credentials || !isRight || credentials.isDisabled) {
-      await this.throttle.countFailure(email, from.ip);
       if (credentials) {
         const reason = isRight ? 'disabled' : 'wrong-password';
         await this.record('person.sign_in_refused', credentials.personId, from.requestId, { reason });
@@ -49,7 +48,7 @@ export class SignInService {
       await noSoonerThan;
       throw new ProblemException('wrong-credentials');
     }
-    await this.throttle.forgetFailures(email, from.ip);
+    await this.throttle.turnedOutWell(email, from.ip);
     const [hat] = await this.identity.hatsOf(credentials.personId);
     if (!hat) throw new ProblemException('forbidden', 'No role has been given to this sign-in yet.');
     await this.record('person.signed_in', credentials.personId, from.requestId);

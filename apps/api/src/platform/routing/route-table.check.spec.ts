@@ -19,7 +19,7 @@ class Fitting {
   @OpenRoute('/api/health/live')
   probe(): void {}
 
-  helper(): void {}
+  notARoute(): void {}
 }
 
 @Controller()
