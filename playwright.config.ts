@@ -1,14 +1,10 @@
 import { defineConfig, devices } from '@playwright/test';
 import { CHROMIUM_PROGRAM } from './scripts/services/debian-packages.js';
 
-/** Set by `npm test -- e2e`, or by hand to the address of a product that runs. */
-const baseURL = process.env.QUARTERPOISE_URL;
-if (!baseURL)
-  throw new Error('QUARTERPOISE_URL is not set: the address of the running product, as "npm start" prints it');
-
 export default defineConfig({
   testDir: 'apps/web/e2e',
   testMatch: '**/*.e2e.ts',
+  globalSetup: './scripts/test/running-product.setup.ts',
   outputDir: 'test-results',
   // one after the other: the tests share one product, and the machine's two processors serve browser, product and database
   workers: 1,
@@ -19,7 +15,8 @@ export default defineConfig({
   reporter: [['list'], ...(process.env.E2E_REPORT ? [['json', { outputFile: process.env.E2E_REPORT }] as const] : [])],
   use: {
     ...devices['Desktop Chrome'],
-    baseURL,
+    // from `npm test -- e2e`, or by hand the address of a product that runs
+    ...(process.env.QUARTERPOISE_URL ? { baseURL: process.env.QUARTERPOISE_URL } : {}),
     viewport: { width: 1280, height: 800 },
     screenshot: 'only-on-failure',
     launchOptions: {
