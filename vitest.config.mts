@@ -50,6 +50,8 @@ export default defineConfig({
           globalSetup: 'scripts/test-services.setup.ts',
           pool: 'forks',
           maxWorkers: 2,
+          // after the others, which use the processors alone
+          sequence: { groupOrder: 1 },
           testTimeout: 60_000,
           hookTimeout: 120_000,
         },
