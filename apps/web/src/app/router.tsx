@@ -1,3 +1,4 @@
+import { Suspense } from 'react';
 import { createBrowserRouter, Outlet, type RouteObject } from 'react-router-dom';
 import { LoadingPage } from '../components/loading';
 import { RouteError } from '../components/route-error';
@@ -14,7 +15,9 @@ import { SignedIn } from './signed-in';
 function Root() {
   return (
     <SessionProvider>
-      <Outlet />
+      <Suspense fallback={<LoadingPage />}>
+        <Outlet />
+      </Suspense>
     </SessionProvider>
   );
 }

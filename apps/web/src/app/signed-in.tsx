@@ -53,7 +53,11 @@ export function SignedIn() {
     return <Navigate to={`${paths.signIn}${search}`} replace />;
   }
   return (
-    <PageShell navigation={NAVIGATION[session.hat]} homePath={paths.home}>
+    <PageShell
+      navigation={NAVIGATION[session.hat]}
+      homePath={paths.home}
+      contentLanguage={session.hat === 'participant' ? undefined : 'en'}
+    >
       <Outlet />
     </PageShell>
   );

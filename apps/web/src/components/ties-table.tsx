@@ -12,10 +12,10 @@ export function TiesTable({ ties }: { ties: RunTotals['ties'] }) {
         <thead>
           <tr>
             <th scope="col">{t('ties.title')}</th>
+            <th scope="col">{t('ties.outcome')}</th>
             <th scope="col">{t('ties.expected')}</th>
             <th scope="col">{t('ties.found')}</th>
             <th scope="col">{t('ties.difference')}</th>
-            <th scope="col">{t('ties.outcome')}</th>
           </tr>
         </thead>
         <tbody>
@@ -24,12 +24,12 @@ export function TiesTable({ ties }: { ties: RunTotals['ties'] }) {
             return (
               <tr key={tie.code}>
                 <th scope="row">{t(`ties.${tie.code}`)}</th>
+                <td className={styles[outcome]}>{t(`ties.outcomes.${outcome}`)}</td>
                 <td>{tie.checked ? <Amount cents={tie.expectedCents} /> : <Amount cents={null} />}</td>
                 <td>
                   <Amount cents={tie.foundCents} />
                 </td>
                 <td>{tie.checked ? <Amount cents={tie.foundCents - tie.expectedCents} /> : <Amount cents={null} />}</td>
-                <td className={styles[outcome]}>{t(`ties.outcomes.${outcome}`)}</td>
               </tr>
             );
           })}

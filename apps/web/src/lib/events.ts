@@ -12,6 +12,8 @@ export interface EventHandlers<Progress> {
   onFinished(): void;
   /** The line is down (true) or up again (false); the wrapper keeps trying by itself. */
   onInterrupted?(isInterrupted: boolean): void;
+  /** The service refused the stream: the work may have ended meanwhile, or the sign-in. */
+  onRefused?(): void;
 }
 
 /**
@@ -48,6 +50,7 @@ export function listen<Progress>(id: EventRouteId, resourceId: string, handlers:
       if (isStopped) return;
       handlers.onInterrupted?.(true);
       if (source?.readyState !== EventSource.CLOSED) return;
+      handlers.onRefused?.();
       timer = setTimeout(open, waitMs);
       waitMs = Math.min(waitMs * 2, LONGEST_WAIT_MS);
     };
@@ -56,25 +59,29 @@ export function listen<Progress>(id: EventRouteId, resourceId: string, handlers:
   return stop;
 }
 
-/** The newest progress of a resource while `isGoing`; `onFinished` is where the caller reads the outcome anew. */
+/**
+ * The newest progress of a resource while `isGoing`. `readAnew` is called when the work has ended and when the stream is refused; that
+ * read then finds the outcome, or that nobody is signed in any more.
+ */
 export function useProgressEvents<Progress>(
   id: EventRouteId,
   resourceId: string,
   isGoing: boolean,
-  onFinished: () => void,
+  readAnew: () => void,
 ): { progress: Progress | null; isInterrupted: boolean } {
   const [progress, setProgress] = useState<Progress | null>(null);
   const [isInterrupted, setInterrupted] = useState(false);
-  const finished = useRef(onFinished);
+  const newest = useRef(readAnew);
   useEffect(() => {
-    finished.current = onFinished;
+    newest.current = readAnew;
   });
 
   useEffect(() => {
     if (!isGoing) return;
     return listen<Progress>(id, resourceId, {
       onProgress: setProgress,
-      onFinished: () => finished.current(),
+      onFinished: () => newest.current(),
+      onRefused: () => newest.current(),
       onInterrupted: setInterrupted,
     });
   }, [id, resourceId, isGoing]);

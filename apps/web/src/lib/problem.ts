@@ -66,9 +66,9 @@ export function problemFrom(status: number, text: string, retryAfter: string | n
   return new ProblemError({ code: codeOfStatus(status), status, retryAfterSeconds });
 }
 
+/** Anything thrown, as a problem. A fault of our own is named as such; its inner words are for the console, not for people. */
 export function asProblem(error: unknown): ProblemError {
-  if (error instanceof ProblemError) return error;
-  return new ProblemError({ code: 'internal-error', status: 0, detail: error instanceof Error ? error.message : '' });
+  return error instanceof ProblemError ? error : new ProblemError({ code: 'internal-error', status: 0 });
 }
 
 /** The fault of one field, by the last part of its pointer (`/body/statedRows` and `/statedRows` both name `statedRows`). */

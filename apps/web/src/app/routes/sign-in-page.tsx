@@ -20,13 +20,13 @@ export function Component() {
   if (session) return <Navigate to={returnAddress(search)} replace />;
   return (
     <div className={styles.page}>
-      <div className={styles.band}>
+      <header className={styles.band}>
         <div className={styles.name}>
           <Mark size={40} />
           <span>Quarterpoise</span>
         </div>
         <p className={styles.sentence}>{t('sentence')}</p>
-      </div>
+      </header>
       <main className={styles.main}>
         <h1>{t('title')}</h1>
         {search.includes('return=') && <p className="quiet">{t('returning')}</p>}

@@ -1,17 +1,16 @@
 import type { ReactNode } from 'react';
 import { useTranslation } from 'react-i18next';
 import { Link, useLocation } from 'react-router-dom';
-import { useSession } from '../../lib/session';
 import { Mark } from '../mark';
 import { HatSwitch } from './hat-switch';
-import { LanguageSwitch } from './language-switch';
 import styles from './page-shell.module.css';
-import { SignOutButton } from './sign-out-button';
-import { ThemeSwitch } from './theme-switch';
+import { PersonMenu } from './person-menu';
 
 interface PageShellProps {
   navigation: readonly { text: string; path: string; covers?: string }[];
   homePath: string;
+  /** Language of the content where it differs from the reader's choice: staff screens are in English. */
+  contentLanguage?: string | undefined;
   children: ReactNode;
 }
 
@@ -25,9 +24,8 @@ function currentEntry<Entry extends { path: string; covers?: string }>(entries: 
 }
 
 /** Header, navigation and main part of every screen behind the sign-in. Plain elements: it is part of everybody's first load. */
-export function PageShell({ navigation, homePath, children }: PageShellProps) {
+export function PageShell({ navigation, homePath, contentLanguage, children }: PageShellProps) {
   const { t } = useTranslation('shell');
-  const { person } = useSession();
   const { pathname } = useLocation();
   const here = currentEntry(navigation, pathname);
   return (
@@ -55,21 +53,11 @@ export function PageShell({ navigation, homePath, children }: PageShellProps) {
           </nav>
           <div className={styles.person}>
             <HatSwitch />
-            <details className={styles.menu}>
-              <summary>
-                <span className={styles.personName}>{person.displayName}</span>
-              </summary>
-              <div className={styles.panel}>
-                <p className={styles.address}>{person.email}</p>
-                <LanguageSwitch />
-                <ThemeSwitch />
-                <SignOutButton />
-              </div>
-            </details>
+            <PersonMenu />
           </div>
         </div>
       </header>
-      <main id="main" tabIndex={-1} className={styles.main}>
+      <main id="main" tabIndex={-1} lang={contentLanguage} className={styles.main}>
         {children}
       </main>
     </>

@@ -19,7 +19,7 @@ export function ImportHistory({ imports, filePath }: ImportHistoryProps) {
   const { t, i18n } = useTranslation(['imports', 'shell']);
   const { items, isLoading, isLoadingMore, hasMore, error, loadMore, refresh } = imports;
   return (
-    <section aria-labelledby="history-heading" className={styles.area}>
+    <div className={styles.area}>
       <h2 id="history-heading">{t('imports:history.title')}</h2>
       {error && <ErrorState problem={error} size="inline" onRetry={() => void refresh()} />}
       {isLoading && <Loading />}
@@ -69,6 +69,6 @@ export function ImportHistory({ imports, filePath }: ImportHistoryProps) {
           </Button>
         </div>
       )}
-    </section>
+    </div>
   );
 }

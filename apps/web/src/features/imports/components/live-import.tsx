@@ -37,7 +37,9 @@ export function LiveImport({ importId, initial, path, onMoved }: LiveImportProps
   return (
     <article className={styles.card} aria-label={file.fileName}>
       <header className={styles.cardHead}>
-        <strong>{path === undefined ? file.fileName : <Link to={path}>{file.fileName}</Link>}</strong>
+        <h2 className={styles.fileName}>
+          {path === undefined ? file.fileName : <Link to={path}>{file.fileName}</Link>}
+        </h2>
         <span className="quiet">
           {t(`kind.${file.kind}`)} · {t(`state.${file.state}`)}
         </span>

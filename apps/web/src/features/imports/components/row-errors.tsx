@@ -13,7 +13,7 @@ export function RowErrors({ importId, errorCount }: { importId: string; errorCou
   const { t, i18n } = useTranslation(['imports', 'shell']);
   const { items, isLoading, isLoadingMore, hasMore, error, loadMore, refresh } = useImportErrors(importId);
   return (
-    <section className={styles.errors} aria-labelledby={`errors-${importId}`}>
+    <div className={styles.errors}>
       <div className={styles.cardHead}>
         <h3 id={`errors-${importId}`}>
           {t('imports:errors.title', { count: errorCount, number: formatCount(errorCount, i18n.language) })}
@@ -61,6 +61,6 @@ export function RowErrors({ importId, errorCount }: { importId: string; errorCou
           </Button>
         </div>
       )}
-    </section>
+    </div>
   );
 }

@@ -42,7 +42,7 @@ export function DeliveryReport({ publication, delivery }: DeliveryReportProps) {
       </dl>
       {delivery && (
         <>
-          <h3>{t('delivery')}</h3>
+          <p className={styles.heading}>{t('delivery')}</p>
           <dl className={styles.counts}>
             {(['sent', 'queued', 'failed', 'bounced', 'read'] as const).map((name) => (
               <DeliveryLine key={name} name={t(`deliveryState.${name}`)} count={number(delivery[name])} />

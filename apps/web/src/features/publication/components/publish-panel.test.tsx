@@ -23,6 +23,13 @@ describe('publishing', () => {
     expect((screen.getByRole('button', { name: 'Publish' }) as HTMLButtonElement).disabled).toBe(true);
   });
 
+  it('offers an auditor nothing to press', () => {
+    fakeApi({});
+    renderScreen(<PublishPanel quarter={quarterView()} />, { hat: 'auditor' });
+    expect(screen.queryByRole('button')).toBeNull();
+    expect(screen.getByText(/The plan administrator or the approver publishes/)).toBeTruthy();
+  });
+
   it('asks once, then publishes the run that was signed', async () => {
     const api = fakeApi({ 'publication.publish': () => quarterView({ state: 'signed_off' }) });
     const quarter = quarterView({

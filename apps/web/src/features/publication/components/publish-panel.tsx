@@ -1,6 +1,7 @@
 import type { QuarterView } from '@quarterpoise/dto';
 import { useTranslation } from 'react-i18next';
 import { ConfirmButton } from '../../../components/confirm-button';
+import { useHat } from '../../../lib/session';
 import { usePublish } from '../api/publish';
 import { DeliveryReport } from './delivery-report';
 import styles from './publication.module.css';
@@ -8,6 +9,7 @@ import styles from './publication.module.css';
 /** Publish with one question; before the sign-off the button says why it cannot; afterwards the result and the delivery. */
 export function PublishPanel({ quarter }: { quarter: QuarterView }) {
   const { t } = useTranslation('publication');
+  const hat = useHat();
   const { publish, isBusy, problem } = usePublish(quarter.id);
   if (quarter.publication) return <DeliveryReport publication={quarter.publication} delivery={quarter.delivery} />;
 
@@ -15,10 +17,11 @@ export function PublishPanel({ quarter }: { quarter: QuarterView }) {
   const runId = quarter.signOff?.runId ?? quarter.currentRun?.id;
   const isSignedOff = quarter.state === 'signed_off' && runId !== undefined;
   const reason = isSignedOff ? (action?.reason ?? null) : (action?.reason ?? t('notSignedOff'));
+  const isPublisher = hat === 'administrator' || hat === 'approver';
   const isAllowed = isSignedOff && action?.allowed === true;
   return (
     <div className={styles.panel}>
-      {action && (
+      {isPublisher && (
         <div>
           <ConfirmButton
             label={t('publish')}
@@ -40,7 +43,7 @@ export function PublishPanel({ quarter }: { quarter: QuarterView }) {
           />
         </div>
       )}
-      {!isAllowed && <p className="quiet">{action ? reason : t('notYours')}</p>}
+      {!isAllowed && <p className="quiet">{isPublisher ? reason : t('notYours')}</p>}
     </div>
   );
 }

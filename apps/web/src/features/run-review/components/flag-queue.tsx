@@ -30,6 +30,7 @@ export function FlagQueue({ runId, canDecide }: FlagQueueProps) {
   const [asked, setAsked] = useState<{ decision: Decision; flags: FlagRow[] } | null>(null);
   const [told, setTold] = useState('');
   const list = useRef<HTMLUListElement>(null);
+  const report = useRef<HTMLParagraphElement>(null);
   const last = Math.max(0, flags.items.length - 1);
   const current = Math.min(position, last);
 
@@ -55,10 +56,12 @@ export function FlagQueue({ runId, canDecide }: FlagQueueProps) {
     entriesOf(list.current)[next]?.focus();
   };
 
+  const wasAsked = useRef(false);
   useEffect(() => {
-    // A decision empties places in the list; the focus stays in the queue instead of falling to the top of the page.
-    if (asked === null && told !== '') entriesOf(list.current)[current]?.focus();
-  }, [asked, told, current, flags.items.length]);
+    // When the question is gone the focus goes back into the queue, or to what was told when the queue is empty.
+    if (wasAsked.current && asked === null) (entriesOf(list.current)[current] ?? report.current)?.focus();
+    wasAsked.current = asked !== null;
+  }, [asked, current]);
 
   useQueueKeys(list, {
     onEnter: setPosition,
@@ -97,7 +100,7 @@ export function FlagQueue({ runId, canDecide }: FlagQueueProps) {
           </Button>
         </div>
       )}
-      <p role="status" className={told === '' ? 'visually-hidden' : styles.told}>
+      <p ref={report} role="status" tabIndex={-1} className={told === '' ? 'visually-hidden' : styles.told}>
         {told}
       </p>
       {flags.error && <ErrorState problem={flags.error} size="inline" onRetry={() => void flags.refresh()} />}

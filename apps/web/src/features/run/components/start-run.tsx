@@ -1,6 +1,7 @@
 import type { QuarterView } from '@quarterpoise/dto';
 import { useTranslation } from 'react-i18next';
 import { ConfirmButton } from '../../../components/confirm-button';
+import { useHat } from '../../../lib/session';
 import { useStartRun } from '../api/start-run';
 import styles from './run.module.css';
 
@@ -16,8 +17,10 @@ interface StartRunProps {
 /** Start and rehearse, each after one question. What is not possible now says why; what the role may never do is left out. */
 export function StartRun({ quarterId, run, rehearse, isAgain }: StartRunProps) {
   const { t } = useTranslation('run');
+  const hat = useHat();
   const starting = useStartRun(quarterId);
   const rehearsing = useStartRun(quarterId);
+  if (hat !== 'administrator') return null;
   const reason = run && !run.allowed ? run.reason : null;
   return (
     <div className={styles.start}>
