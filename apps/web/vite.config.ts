@@ -10,6 +10,7 @@ export default defineConfig({
     alias: {
       '@quarterpoise/dto': source('dto'),
       '@quarterpoise/returns': source('returns'),
+      '@quarterpoise/rules': source('rules'),
     },
   },
   server: { proxy: { '/api': 'http://127.0.0.1:4600' } },

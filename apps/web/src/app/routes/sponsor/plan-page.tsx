@@ -13,7 +13,6 @@ export function Component() {
   const { planId = '' } = useParams();
   const { t } = useTranslation('plans');
   const { data: plan, error, mutate } = usePlan(planId);
-  if (error) return <ErrorState problem={error} onRetry={() => void mutate()} />;
   return (
     <Page title={plan?.name ?? t('title')} above={<Link to={paths.plans}>{t('title')}</Link>} lead={plan?.sponsorName}>
       <div className={styles.columns}>
@@ -23,7 +22,13 @@ export function Component() {
         </section>
         <section>
           <h2>{t('setUp')}</h2>
-          {plan ? <PlanFacts plan={plan} /> : <Loading lines={6} />}
+          {plan ? (
+            <PlanFacts plan={plan} />
+          ) : error ? (
+            <ErrorState problem={error} size="inline" onRetry={() => void mutate()} />
+          ) : (
+            <Loading lines={6} />
+          )}
         </section>
       </div>
     </Page>

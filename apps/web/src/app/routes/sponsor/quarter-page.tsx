@@ -26,7 +26,6 @@ export function Component() {
   const { quarterId = '' } = useParams();
   const { t, i18n } = useTranslation('quarter');
   const { data: quarter, error, mutate } = useQuarter(quarterId);
-  if (error && !quarter) return <ErrorState problem={error} onRetry={() => void mutate()} />;
   return (
     <Page
       title={quarter ? `${formatQuarter(quarter.code, i18n.language)}: ${t(`state.${quarter.state}`)}` : t('quarter')}
@@ -38,6 +37,8 @@ export function Component() {
           <QuarterSteps quarter={quarter} content={stepContent(quarter)} />
           <QuarterHistory history={quarter.history} />
         </div>
+      ) : error ? (
+        <ErrorState problem={error} onRetry={() => void mutate()} />
       ) : (
         <Loading lines={10} />
       )}
