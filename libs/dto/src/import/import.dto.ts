@@ -146,6 +146,7 @@ export const importRowError = z.object({
     'before-records-begin',
     'in-the-future',
     'column-count',
+    'not-an-email',
   ]),
   reason: z.string(),
   remedy: z.string(),
