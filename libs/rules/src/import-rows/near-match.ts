@@ -12,7 +12,7 @@ export function nearMatch(text: string, choices: readonly string[]): string | nu
   if (word === '' || word.length > 60) return null;
   const ranked = choices
     .map((choice) => ({ choice, distance: editDistance(word, normalised(choice)) }))
-    .sort((a, b) => a.distance - b.distance);
+    .toSorted((a, b) => a.distance - b.distance);
   const [best, second] = ranked;
   if (!best) return null;
   const isNear = best.distance <= Math.max(1, Math.floor(word.length / 5));

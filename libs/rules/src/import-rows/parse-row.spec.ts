@@ -201,6 +201,6 @@ it('the rules read every column of the contract and no other', () => {
       get: (_, column) => (asked.add(String(column)), ''),
     });
     rowParser(kind as ImportKind)({ line: 2, values }, context);
-    expect([...asked].sort()).toEqual([...required, ...optional].sort());
+    expect([...asked].toSorted()).toEqual([...required, ...optional].toSorted());
   }
 });

@@ -16,7 +16,7 @@ const MACHINES: readonly [StateMachine, readonly string[]][] = [
 describe('the state tables', () => {
   it.each(MACHINES)('$subject has a sound table over exactly the states of the contract', (machine, states) => {
     expect(faultsOf(machine)).toEqual([]);
-    expect(Object.keys(machine.states).sort()).toEqual([...states].sort());
+    expect(Object.keys(machine.states).toSorted()).toEqual([...states].toSorted());
   });
 
   it('lets through the whole life of a quarter and nothing that skips a step', () => {

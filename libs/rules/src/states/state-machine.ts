@@ -86,7 +86,7 @@ export function faultsOf(machine: StateMachine): string[] {
     else if (!finishing.has(state)) faults.push(`state ${state} never ends`);
   }
   const moves = machine.transitions.map(({ from, to }) => `${from} → ${to}`);
-  for (const move of new Set(moves.filter((move, index) => moves.indexOf(move) !== index))) {
+  for (const move of new Set(moves.filter((each, index) => moves.indexOf(each) !== index))) {
     faults.push(`move ${move} stands twice`);
   }
   for (const { from, to } of machine.transitions) {

@@ -6,7 +6,7 @@ import { UnreadableFile } from './unreadable-file.js';
 
 const HEADER = 'fund,as_of,unit_price';
 
-const values = async (file: string | Uint8Array, pieceBytes?: number) =>
+const rowsOf = async (file: string | Uint8Array, pieceBytes?: number) =>
   (await readAll(file, 'prices', pieceBytes)).rows.map(({ line, values }) => [
     line,
     values['fund'],
@@ -37,9 +37,9 @@ describe('files that can be read', () => {
     ['quotes', `"fund","as_of","unit_price"\n"larch","2026-09-30","12.5"\nalder,"2026-09-30",7\n`],
     ['other columns', `note,as_of,unit_price,fund\n"a, b",2026-09-30,12.5,larch\nx,2026-09-30,7,alder\n`],
   ])('%s', async (_, file) => {
-    expect(await values(file)).toEqual(expected);
+    expect(await rowsOf(file)).toEqual(expected);
     // cut at every byte, so that every character and every quote once stands at the edge of a piece
-    expect(await values(file, 1)).toEqual(expected);
+    expect(await rowsOf(file, 1)).toEqual(expected);
   });
 
   it('keeps separators, doubled quotes and line breaks within quotes, and counts lines by the file', async () => {
@@ -50,9 +50,9 @@ describe('files that can be read', () => {
       [7, 'x\ny', '2026-09-30', '3'],
       [10, 'last', '2026-09-30', '4'],
     ];
-    expect(await values(file)).toEqual(expectedRows);
-    expect(await values(file, 1)).toEqual(expectedRows);
-    expect(await values(file, 7)).toEqual(expectedRows);
+    expect(await rowsOf(file)).toEqual(expectedRows);
+    expect(await rowsOf(file, 1)).toEqual(expectedRows);
+    expect(await rowsOf(file, 7)).toEqual(expectedRows);
   });
 
   it('removes a byte order mark, tells of it, of semicolons and of columns that it ignores', async () => {

@@ -10,9 +10,9 @@ export interface XlsxArchive {
 
 /** What a reader of XML wants to be told; names come without their prefix. */
 export interface XmlHandlers {
-  open(name: string, attributes: Readonly<Record<string, string>>): void;
-  text?(text: string): void;
-  close?(name: string): void;
+  readonly open: (name: string, attributes: Readonly<Record<string, string>>) => void;
+  readonly text?: (text: string) => void;
+  readonly close?: (name: string) => void;
 }
 
 /** A part that unpacks to more than this was not made for us. */

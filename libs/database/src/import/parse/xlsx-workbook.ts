@@ -1,6 +1,6 @@
 import { posix } from 'node:path';
 import { type CellStyle, styleOf } from './xlsx-cells.js';
-import { readPart, type XlsxArchive } from './xlsx-archive.js';
+import { readPart, type XlsxArchive, type XmlHandlers } from './xlsx-archive.js';
 import { UnreadableFile } from './unreadable-file.js';
 
 /** What is needed to read the first sheet. */
@@ -83,7 +83,7 @@ async function readTexts(archive: XlsxArchive, path: string): Promise<string[]> 
   await readPart(archive, path, {
     open(name) {
       if (name === 'si') text = '';
-      inside.open(name);
+      inside.open(name, {});
     },
     text: inside.text,
     close(name) {
@@ -100,18 +100,18 @@ async function readTexts(archive: XlsxArchive, path: string): Promise<string[]> 
 }
 
 /** Gathers the text of `t` elements, which rich text has several of; readings of Japanese words (`rPh`) are not part of it. */
-export function textCollector(add: (text: string) => void) {
+export function textCollector(add: (text: string) => void): Required<XmlHandlers> {
   let isText = false;
   let isReading = false;
   return {
-    open(name: string) {
+    open: (name) => {
       if (name === 'rPh') isReading = true;
       if (name === 't') isText = true;
     },
-    text(text: string) {
+    text: (text) => {
       if (isText && !isReading) add(text);
     },
-    close(name: string) {
+    close: (name) => {
       if (name === 'rPh') isReading = false;
       if (name === 't') isText = false;
     },

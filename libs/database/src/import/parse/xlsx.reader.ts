@@ -115,7 +115,7 @@ async function* sheetPieces(
         text = '';
       }
       isValue = name === 'v';
-      inside.open(name);
+      inside.open(name, {});
     },
     text(part) {
       if (isValue) text += part;
