@@ -1,5 +1,6 @@
 export * from './states/import.states.js';
 export * from './states/inquiry.states.js';
+export { type QuarterAction, quarterActions, type QuarterSituation } from './states/quarter-actions.js';
 export * from './states/quarter.states.js';
 export * from './states/run.states.js';
 export * from './states/state-machine.js';
@@ -11,3 +12,8 @@ export type { PriceRow } from './import-rows/prices.row.js';
 export type { RosterRow } from './import-rows/roster.row.js';
 export * from './import-rows/row-error.js';
 export { type RawRow, type RowContext, rowContextOf } from './import-rows/row-reader.js';
+export { type AccountCheckInput, type CheckedFlag, type Figures, SEVERITIES, type Severity } from './checks/check.js';
+export { checkAccount, FLAG_CODES, sortFlags } from './checks/checks.js';
+export { type OutlierFlag, outlierCheck } from './checks/outlier.check.js';
+export { sampleAccounts } from './checks/sample-accounts.js';
+export { distribution, type TieInput, tieTotals, untiedCount } from './checks/totals.js';

@@ -20,6 +20,10 @@ export const checkThresholds = z.object({
   extremeReturnPercent: z.number().positive().default(25),
   /** Robust z-score (median and MAD) of the quarter's return among the plan's accounts. */
   outlierScore: z.number().positive().default(6),
+  /** How many days at the quarter's end count as its last ones, the closing day among them. */
+  lastDays: z.int().min(1).max(31).default(3),
+  /** Flow on one of them beyond this share of the larger of opening and closing balance, in percent. */
+  lastDaysFlowPercent: z.number().positive().default(25),
 });
 
 /** What each kind of activity means for the return, versioned by quarter. The defaults are the trade's usual choices. */
@@ -45,3 +49,4 @@ export const returnPolicy = z.object({
   checks: checkThresholds.prefault({}),
 });
 export type ReturnPolicyOptions = z.infer<typeof returnPolicy>;
+export type CheckThresholds = z.infer<typeof checkThresholds>;
