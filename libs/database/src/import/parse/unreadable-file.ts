@@ -13,7 +13,8 @@ export class UnreadableFile extends Error {
     readonly detail: string,
     /** The line that is at fault, where there is one. */
     readonly line: number | null = null,
+    options?: ErrorOptions,
   ) {
-    super(`${PROBLEMS[code].title}: ${detail}`);
+    super(`${PROBLEMS[code].title}: ${detail}`, options);
   }
 }

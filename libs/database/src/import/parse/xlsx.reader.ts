@@ -33,10 +33,8 @@ export async function* readXlsx(source: ByteSource, options: ReadOptions): Async
     yield* batches(archive, workbook, options, bytes.length);
   } catch (error) {
     if (error instanceof UnreadableFile) throw error;
-    throw new UnreadableFile(
-      'import-not-text',
-      `${options.name} cannot be opened as an Excel workbook; it is damaged.`,
-    );
+    const detail = `${options.name} cannot be opened as an Excel workbook; it is damaged.`;
+    throw new UnreadableFile('import-not-text', detail, null, { cause: error });
   }
 }
 
