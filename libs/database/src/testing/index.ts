@@ -1,0 +1,2 @@
+export * from './factories.js';
+export * from './harness.js';
