@@ -1,4 +1,4 @@
-import { mkdirSync, rmSync } from 'node:fs';
+import { existsSync, mkdirSync, rmSync } from 'node:fs';
 import { join } from 'node:path';
 import { inProject } from './project-root.js';
 import { askedToStop, runCommand } from './run-command.js';
@@ -16,7 +16,9 @@ const FOLDER = inProject('.data/test');
 runCommand(async (args) => {
   const unknown = args.filter((arg) => !PARTS.includes(arg as Part));
   if (unknown.length > 0) throw new Error(`Unknown: ${unknown.join(', ')}. The parts are ${PARTS.join(', ')}.`);
-  const wanted = new Set<Part>(args.length > 0 ? (args as Part[]) : PARTS);
+  const wanted = new Set<Part>(
+    args.length > 0 ? (args as Part[]) : PARTS.filter((part) => part !== 'e2e' || hasErrands()),
+  );
   let isStopping = false;
   void askedToStop().then(() => (isStopping = true));
   mkdirSync(FOLDER, { recursive: true });
@@ -51,6 +53,11 @@ runCommand(async (args) => {
   console.log(`${passed} passed, ${failed} failed`);
   return failed > 0 || isStopping ? 1 : 0;
 });
+
+/** The product cannot be started before worker and seeds are written; its errands come with them. */
+function hasErrands(): boolean {
+  return existsSync(inProject('apps/web/e2e'));
+}
 
 async function discard(): Promise<void> {
   for (const place of ['services', 'product']) await discardData(join(FOLDER, place));

@@ -42,7 +42,7 @@ describe('a write with an idempotency key', () => {
     const answers = await Promise.all(
       Array.from({ length: 5 }, () => administrator.post(counts, { note: 'a' }, withKey(key))),
     );
-    expect(answers.map(({ status, body }) => [status, body.count])).toEqual(Array(5).fill([201, 1]));
+    expect(answers.map(({ status, body }) => [status, body.count])).toEqual(Array.from({ length: 5 }, () => [201, 1]));
     expect(state.count).toBe(1);
   });
 

@@ -7,7 +7,7 @@ import { SESSION_COOKIE } from '../platform/session/session.setup.js';
 type Schema = Record<string, unknown>;
 
 const schemaOf = (schema: z.ZodType, io: 'input' | 'output'): Schema => {
-  const { $schema, ...rest } = z.toJSONSchema(schema, { io, unrepresentable: 'any' }) as Schema;
+  const { $schema: _dialect, ...rest } = z.toJSONSchema(schema, { io, unrepresentable: 'any' }) as Schema;
   return rest;
 };
 

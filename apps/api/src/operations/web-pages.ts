@@ -23,7 +23,9 @@ export async function serveWebPages(app: NestFastifyApplication, folder: string)
     index: false,
     preCompressed: true,
     cacheControl: false,
-    setHeaders: (reply, path) => reply.header('cache-control', path.startsWith(hashed) ? FOR_EVER : 'no-cache'),
+    setHeaders: (reply, path) => {
+      void reply.header('cache-control', path.startsWith(hashed) ? FOR_EVER : 'no-cache');
+    },
   });
   const instance = app.getHttpAdapter().getInstance();
   for (const url of ['/', '/*']) {
